@@ -1,0 +1,3 @@
+"""The version of the program, stated once."""
+
+VERSION = "0.1.0"

@@ -1,0 +1,1 @@
+"""The program that people run: command line and full-screen browser."""
