@@ -57,6 +57,8 @@ class Target:
     certificate: str | None = None
     particle_is_sphere: bool | None = None
     """None: no particle shape was stated, so in rectangular cloth the worse direction counts."""
+    oversize_mm: float | None = None
+    """Largest single oversize of an opening that the user vouches for; guards are judged with it."""
     origin: Mapping[str, str] = field(default_factory=dict)
     """Field → 'stated', 'derived' or 'assumed'."""
 

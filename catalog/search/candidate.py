@@ -96,6 +96,8 @@ class Candidate:
     findings: tuple[Finding, ...] = ()
     penalty: Penalty = Penalty()
     stock: tuple[StockLine, ...] = field(default=())
+    reason: str = ""
+    """The one sentence for a list."""
 
     def deviation(self, name: str) -> Deviation | None:
         """The deviation called *name*, or None."""

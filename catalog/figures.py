@@ -1,0 +1,35 @@
+"""The figures that follow from a construction, in one place: what is stored is what is computed here."""
+
+from catalog.cloth import Figures
+from catalog.construction import Construction, Weave
+from catalog.physics import geometry, mass
+
+DERIVATION_VERSION = 1
+"""Raised when a formula changes; a store with another version is recomputed."""
+
+
+def figures(construction: Construction, density_kg_m3: float | None) -> Figures:
+    """Compute apertures (mm), open area (%), masses (kg/m²), thickness (mm).
+
+    Mass is None where *density_kg_m3* is. Filter cloth has no aperture and no open area; its mass is the
+    geometric estimate. The twilled Dutch sphere is filled in later: it takes seconds.
+    """
+    sides = (construction.warp, construction.weft)
+    pitches = [float(side.pitch_mm) for side in sides]
+    wires = [float(side.wire_mm) for side in sides]
+    if construction.is_filter:
+        return _filter_figures(construction.weave, pitches, wires, density_kg_m3)
+    apertures = [float(side.aperture_mm) for side in sides]
+    nominal = geometric = None
+    if density_kg_m3 is not None:
+        twilled = construction.weave is Weave.TWILLED
+        nominal = mass.mass_nominal_kg_m2(*pitches, *wires, density_kg_m3)
+        geometric = mass.mass_geometric_kg_m2(*pitches, *wires, density_kg_m3, twilled)
+    return Figures(
+        warp_aperture_mm=apertures[0],
+        weft_aperture_mm=apertures[1],
+        open_area_pct=geometry.open_area_pct(*apertures, *pitches),
+        mass_kg_m2=nominal,
+        mass_geometric_kg_m2=geometric if geometric is not None and isfinite(geometric) else None,
+        thickness_mm=geometry.thickness_least_mm(*wires),
+    )

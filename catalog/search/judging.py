@@ -1,0 +1,90 @@
+"""A cloth, judged: gates, comparison, findings, verdicts, penalty and lots in one candidate."""
+
+from collections.abc import Sequence
+
+from catalog.cloth import Cloth
+from catalog.search.candidate import Candidate, Finding, Fit, StockLine, Verdict
+from catalog.search.comparison import Comparison, compare
+from catalog.search.deviations import deviations
+from catalog.search.filter_comparison import decide_filter
+from catalog.search.findings import findings, reason
+from catalog.search.gates import gate_findings
+from catalog.search.guard import guard_findings
+from catalog.search.penalty import penalty
+from catalog.search.purposes import is_to_harm_side
+from catalog.search.rules import HOUSE_RULES, HouseRules
+from catalog.search.verdict import decide
+from catalog.stock.fitting import Wanted, fit
+from catalog.stock.lots import Lot
+from catalog.target import Purpose, Target
+
+SIDE_BY_SIDE = (Purpose.RETAIN, Purpose.PASS)
+GOOD = (Verdict.INTERCHANGEABLE, Verdict.NEAR_SAFE, Verdict.NEAR_RISK)
+
+
+def judge(
+    target: Target,
+    cloth: Cloth,
+    distance: float | None = None,
+    turned: bool = False,
+    lots: Sequence[Lot] = (),
+    rules: HouseRules = HOUSE_RULES,
+) -> Candidate:
+    """Set *cloth* against *target* and say what differs and whether it matters."""
+    c = compare(target, cloth, turned, rules)
+    purposes = target.purposes or SIDE_BY_SIDE
+    gates = gate_findings(c)
+    by_purpose, details = _verdicts(c, purposes, gates, rules)
+    judged = [by_purpose[p.value] for p in purposes]
+    verdict = max(judged, key=lambda v: v.rank)
+    harmed = verdict in GOOD and any(
+        is_to_harm_side(p, c) for p in purposes if not cloth.construction.is_filter
+    )
+    everything = gates + details
+    return Candidate(
+        cloth=cloth,
+        distance=distance,
+        verdict=verdict,
+        by_purpose=by_purpose,
+        harm_side=harmed,
+        turned=turned,
+        deviations=deviations(c, rules),
+        findings=tuple(everything),
+        penalty=penalty(c, purposes, rules),
+        stock=stock_lines(lots, target),
+        reason=reason(everything, c),
+    )
+
+
+def _verdicts(
+    c: Comparison, purposes: tuple[Purpose, ...], gates: list[Finding], rules: HouseRules
+) -> tuple[dict[str, Verdict], list[Finding]]:
+    """Retain and pass always, and each purpose that was named; with the findings behind them."""
+    wanted = dict.fromkeys((*SIDE_BY_SIDE, *purposes))
+    if c.target.reading.is_filter or c.made.is_filter:
+        verdict, details = decide_filter(c, gates, rules)
+        return {p.value: verdict for p in wanted}, details
+    details = findings(c, purposes, rules)
+    if Purpose.GUARD in purposes:
+        details = guard_findings(c) + details
+    return {p.value: decide(p, c, gates, rules) for p in wanted}, details
+
+
+def stock_lines(lots: Sequence[Lot], target: Target) -> tuple[StockLine, ...]:
+    """Each lot with whether it serves the need: those that do come first."""
+    lines = [_stock_line(lot, target) for lot in lots]
+    return tuple(sorted(lines, key=lambda line: line.fit.ok is False))
+
+
+def _stock_line(lot: Lot, target: Target) -> StockLine:
+    need = target.need
+    wanted = Wanted(certificate=target.certificate)
+    if need is not None:
+        wanted = Wanted(need.pieces, need.width_mm, need.length_mm, need.diameter_mm, target.certificate)
+    found = fit(lot, wanted)
+    return StockLine(lot, Fit(found.ok, found.why))
+
+
+def order(candidates: Sequence[Candidate]) -> list[Candidate]:
+    """Best verdict first, then the penalty, then id."""
+    return sorted(candidates, key=lambda c: (c.verdict.rank, round(c.penalty.total, 9), c.cloth.id))
