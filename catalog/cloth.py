@@ -54,3 +54,7 @@ class Cloth:
     demo: bool = False
     stated_open_area_pct: float | None = None
     stated_mass_kg_m2: float | None = None
+    stated_aperture_mm: float | None = None
+    """Where a list states an aperture beside count and wire; what is computed is in *figures*."""
+    stated_count_per_in: float | None = None
+    """Where a list states a count beside aperture and wire."""
