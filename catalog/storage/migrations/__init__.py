@@ -1,0 +1,1 @@
+"""The migrations of the store, applied by storage.migrating."""

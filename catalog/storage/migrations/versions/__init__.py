@@ -1,0 +1,1 @@
+"""One module a revision, numbered in order; a later number is a newer store."""
