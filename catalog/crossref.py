@@ -35,6 +35,8 @@ class Request:
     limit: int = 50
     particle_is_sphere: bool | None = None
     oversize_mm: float | None = None
+    reading: str | None = None
+    """Label of the one reading to take, where the callout's question has been answered."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -57,7 +59,7 @@ class Answer:
 def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> Answer:
     """Find the nearest equivalents of a callout. Raises InputError where no reading survives."""
     understanding = callout.read(request.text)
-    readings = readings_to_match(understanding)
+    readings = _taken(understanding, request.reading) or readings_to_match(understanding)
     targets = tuple(_aim(reading, request, rules) for reading in readings)
     judged = [_judge_all(target, reader, request, rules) for target in targets]
     any_will_do = understanding.status is not Status.ASK
@@ -66,6 +68,11 @@ def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> 
     with_stock = _with_stock(shown, targets, reader)
     said = dict.fromkeys(line for target in targets for line in cautions(target, request.text))
     return Answer(request, understanding, targets, tuple(with_stock), understanding.question, tuple(said))
+
+
+def _taken(understanding: Understanding, label: str | None) -> tuple[Reading, ...]:
+    """The surviving reading that was answered with; none where nothing was answered."""
+    return tuple(r for r in understanding.surviving if r.label == label)[:1]
 
 
 def readings_to_match(understanding: Understanding) -> tuple[Reading, ...]:
