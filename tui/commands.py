@@ -1,4 +1,4 @@
-"""Every action of the browser, once: bindings, hints, palette, help screen and the README's key table follow it."""
+"""Every action of the browser, once: bindings, hints, palette, help and the README's key table follow it."""
 
 from collections.abc import Iterable, Mapping
 from dataclasses import dataclass
@@ -8,9 +8,8 @@ LIST = "lists"
 MATCH = "match"
 CATALOGUE = "catalogue"
 STOCK = "stock"
-IDENTIFY = "identify"
 TABLES = "tables"
-PLACES = (MATCH, CATALOGUE, STOCK, IDENTIFY, TABLES)
+PLACES = (MATCH, CATALOGUE, STOCK, TABLES)
 
 
 @dataclass(frozen=True, slots=True)
@@ -40,10 +39,7 @@ COMMANDS: tuple[Command, ...] = (
     ),
     Command("go_stock", ("f4", "S"), "Stock", "See what lies where.", EVERYWHERE, while_typing=True),
     Command(
-        "go_identify", ("f5", "I"), "Identify", "Find out which cloth was measured.", EVERYWHERE, while_typing=True
-    ),
-    Command(
-        "go_tables", ("f6", "T"), "Tables", "Look up gauges, sieves, alloys and safety distances.", EVERYWHERE,
+        "go_tables", ("f5", "T"), "Tables", "Look up gauges, sieves, alloys and safety distances.", EVERYWHERE,
         while_typing=True,
     ),
     Command(
@@ -98,8 +94,6 @@ COMMANDS: tuple[Command, ...] = (
     Command("all_lots", ("x",), "All lots", "Show the lots of every cloth again.", STOCK, True),
     Command("lot_cloth", ("d",), "Its cloth", "Go to the cloth of the highlighted lot.", STOCK, True),
     Command("next_table", ("t", "tab"), "Next table", "Go to the next table.", TABLES, True),
-    Command("next_field", ("tab", "down"), "Next field", "Go to the next measurement.", IDENTIFY,
-            while_typing=True),
 )  # fmt: skip
 
 GLYPHS: Mapping[str, str] = {

@@ -5,7 +5,6 @@ from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any
 
-from catalog.search.candidate import Verdict
 from tui.exit_codes import one_line
 
 Piece = tuple[str, str]
@@ -14,14 +13,17 @@ Line = Sequence[Piece]
 
 MM_PER_INCH = 25.4
 LONGEST = 400
+INCH_DECIMALS = 5
+FINE_INCH = 0.001
 MARKS_KEPT = 2
 UNITS = ("both", "inch", "metric")
 
 PLAIN: Mapping[int, str] = str.maketrans(
     {
         "×": "x", "²": "2", "³": "3", "±": "+/-", "µ": "u", "μ": "u", "Ø": "dia ", "ø": "dia ", "−": "-", "≈": "~",
-        "≥": ">=", "≤": "<=", "″": '"', "′": "'", "½": "1/2", "¼": "1/4", "¾": "3/4", "°": " deg", "–": "-",
-        "—": "-", "·": "-", "→": "->", "…": "..", "Δ": "d", "√": "sqrt ", "π": "pi", "ρ": "rho", "│": "|", "─": "-",
+        "│": "|", "─": "-", "≥": ">=", "≤": "<=", "″": '"', "′": "'", "½": "1/2", "¼": "1/4", "¾": "3/4",
+        "°": " deg", "–": "-",
+        "—": "-", "·": "-", "→": "->", "…": "..", "Δ": "d", "√": "sqrt ", "π": "pi", "ρ": "rho",
         "ü": "ue", "ö": "oe", "ä": "ae", "ß": "ss", "›": ">", "▸": ">", "•": "*", "“": '"', "”": '"', "‘": "'",
         "’": "'", "┼": "+", "↑": "^", "↓": "v", "←": "<-", "é": "e", "è": "e", "⁴": "4",
     }
@@ -127,10 +129,13 @@ def mm(value: float | None) -> str:
 
 
 def inch(value_mm: float | None) -> str:
-    """The same length in inches, four significant digits, as the trade writes them: '.01017'."""
+    """The same length in inches as the trade writes it, at most five decimals: '.01017'; finer only below .001."""
     if value_mm is None:
         return "–"
-    text = significant(value_mm / MM_PER_INCH)
+    value = value_mm / MM_PER_INCH
+    text = significant(value)
+    if abs(value) >= FINE_INCH and len(text.partition(".")[2]) > INCH_DECIMALS:
+        text = f"{value:.{INCH_DECIMALS}f}".rstrip("0")
     return text[1:] if text.startswith("0.") else text.replace("-0.", "-.", 1)
 
 
@@ -192,13 +197,14 @@ class Seal:
     ink: str
 
 
-SEALS: Mapping[Verdict, Seal] = {
-    Verdict.SAME: Seal("=", "=", "same", "good"),
-    Verdict.INTERCHANGEABLE: Seal("≈", "~", "interchangeable", "good"),
-    Verdict.NEAR_SAFE: Seal("+", "+", "near, safe side", "near"),
-    Verdict.NEAR_RISK: Seal("!", "!", "near, risk side", "risk"),
-    Verdict.CANNOT_SAY: Seal("?", "?", "cannot say", "ask"),
-    Verdict.NOT_EQUIVALENT: Seal("×", "x", "not equivalent", "bad"),
+# keyed by the verdict's code, so that the start needs none of the search
+SEALS: Mapping[str, Seal] = {
+    "same": Seal("=", "=", "same", "good"),
+    "interchangeable": Seal("≈", "~", "interchangeable", "good"),
+    "near-safe": Seal("+", "+", "near, safe side", "near"),
+    "near-risk": Seal("!", "!", "near, risk side", "risk"),
+    "cannot-say": Seal("?", "?", "cannot say", "ask"),
+    "not-equivalent": Seal("×", "x", "not equivalent", "bad"),
 }
 
 ROLES: Mapping[str, tuple[str, str]] = {

@@ -157,17 +157,25 @@ def _top(one: Figure, x: float, y: float) -> tuple[int, int]:
     best, found = -1e9, (OPENING, 0)
     for warp in _near(x, one.warp_pitch, one.warp_wire):
         off = x - (warp + 0.5) * one.warp_pitch
-        rise = -warp_swing * _wave(lambda j, i=warp: one.weft_is_over(i, j), y - one.weft_pitch / 2, one.weft_pitch)  # type: ignore[misc]
+        rise = -warp_swing * _along_warp(one, warp, y)
         height = rise + sqrt(max(0.0, (one.warp_wire / 2) ** 2 - off * off))
         if height > best:
             best, found = height, (WARP, warp)
     for weft in _near(y, one.weft_pitch, one.weft_wire):
         off = y - (weft + 0.5) * one.weft_pitch
-        rise = weft_swing * _wave(lambda i, j=weft: one.weft_is_over(i, j), x - one.warp_pitch / 2, one.warp_pitch)  # type: ignore[misc]
+        rise = weft_swing * _along_weft(one, weft, x)
         height = rise + sqrt(max(0.0, (one.weft_wire / 2) ** 2 - off * off))
         if height > best:
             best, found = height, (WEFT, weft)
     return found
+
+
+def _along_warp(one: Figure, warp: int, y: float) -> float:
+    return _wave(lambda weft: one.weft_is_over(warp, weft), y - one.weft_pitch / 2, one.weft_pitch)
+
+
+def _along_weft(one: Figure, weft: int, x: float) -> float:
+    return _wave(lambda warp: one.weft_is_over(warp, weft), x - one.warp_pitch / 2, one.warp_pitch)
 
 
 def _near(place: float, pitch: float, wire: float) -> list[int]:

@@ -1,0 +1,141 @@
+"""The application: themes, the one screen, manners towards the terminal."""
+
+import gc
+import signal
+from collections.abc import Callable, Mapping
+from pathlib import Path
+from typing import Any
+
+from textual.app import App
+from textual.theme import Theme
+
+from tui.door import OpenStore
+from tui.memory import Memory
+from tui.presenting import UNITS
+from tui.screens.desk import Desk
+from tui.widgets.inks import ink_table
+
+
+def _theme(name: str, is_dark: bool) -> Theme:
+    ink = ink_table(is_dark)
+    return Theme(
+        name=name,
+        primary=ink["head"],
+        secondary=ink["line"],
+        warning=ink["risk"],
+        error=ink["bad"],
+        success=ink["good"],
+        accent=ink["head"],
+        foreground=ink["text"],
+        background=ink["paper"],
+        surface=ink["panel"],
+        panel=ink["panel"],
+        dark=is_dark,
+    )
+
+
+class CrossclothApp(App[None]):
+    """The browser."""
+
+    CSS_PATH = "styles.tcss"
+    TITLE = "crosscloth"
+    ENABLE_COMMAND_PALETTE = False
+
+    def __init__(
+        self,
+        opener: Callable[[], OpenStore],
+        *,
+        units: str = "",
+        ascii_only: bool = False,
+        directory: Path | None = None,
+        keys: Mapping[str, str] | None = None,
+        **rest: Any,
+    ) -> None:
+        super().__init__(**rest)
+        self.animation_level = "none"
+        self.memory = Memory.load(directory)
+        self._directory = directory
+        remembered = self.memory.units if self.memory.units in UNITS else "both"
+        self.desk = Desk(
+            opener, self.memory, units if units in UNITS else remembered, ascii_only, keys or {}, directory
+        )
+        self._keys = {name: own for name, own in (keys or {}).items() if own}
+        self._dress(ascii_only)
+
+    def _dress(self, ascii_only: bool) -> None:
+        """Themes; and where asked for, no colour and no sign beyond ASCII."""
+        from tui.terminal import AsciiOnly, Colourless
+
+        self.register_theme(_theme("crosscloth-dark", True))
+        self.register_theme(_theme("crosscloth-light", False))
+        self.theme = "crosscloth-dark" if self.memory.dark else "crosscloth-light"
+        if self.no_color:
+            self._filters.append(Colourless())
+        if ascii_only:
+            self._filters.append(AsciiOnly())
+
+    def get_default_screen(self) -> Desk:
+        """The desk."""
+        return self.desk
+
+    def on_mount(self) -> None:
+        """Take the user's keys, and leave a clean terminal when told to end."""
+        if self._keys:
+            self.set_keymap(self._keys)
+        if not self.is_headless:
+            self._mind_signals()
+        self.call_after_refresh(gc.enable)
+
+    def _mind_signals(self) -> None:
+        import asyncio
+
+        loop = asyncio.get_running_loop()
+        for number in (signal.SIGTERM, signal.SIGHUP):
+            loop.add_signal_handler(number, self.exit, None, 128 + number)
+
+    def action_help_quit(self) -> None:
+        """Ctrl+C says how to leave instead of doing it by mistake."""
+        self.desk.say("F10 leaves, or q outside the line.")
+
+    async def action_quit(self) -> None:
+        """Leave."""
+        self.desk.action_quit()
+
+    def on_unmount(self) -> None:
+        """Keep what is remembered."""
+        self.memory.save(self._directory)
+        self.desk.door.close()
+
+
+def run(
+    location: str,
+    *,
+    ascii_only: bool = False,
+    units: str = "",
+    mouse: bool = True,
+    directory: Path | None = None,
+    keys: Mapping[str, str] | None = None,
+) -> int:
+    """Run the browser on the store at *location*; the exit status comes back.
+
+    *units*: 'both', 'inch', 'metric', or '' for what was used last. *directory* holds what is remembered.
+    *keys*: command id to keys of the user's own, with commas.
+    """
+    from tui.terminal import forgiving_driver
+
+    def opener() -> OpenStore:
+        from catalog.storage.opening import open_store
+
+        return open_store(location)
+
+    gc.disable()  # until the first frame: collecting while importing costs a tenth of the start
+    app = CrossclothApp(
+        opener,
+        units=units,
+        ascii_only=ascii_only,
+        directory=directory,
+        keys=keys,
+        driver_class=forgiving_driver(),
+    )
+    app.run(mouse=mouse)
+    return app.return_code or 0

@@ -1,0 +1,158 @@
+"""A place: a line to type in perhaps, a list, and what the list's highlighted row is about."""
+
+from collections.abc import Sequence
+from typing import TYPE_CHECKING, ClassVar, cast
+
+from textual.binding import BindingType
+from textual.containers import Vertical
+from textual.widgets import Input
+
+from tui.commands import LIST
+from tui.presenting import Line, plain
+from tui.screens.keys import bindings
+from tui.widgets.paged_table import PagedTable
+
+if TYPE_CHECKING:
+    from tui.screens.desk import Desk
+
+
+class Place(Vertical):
+    """What every place does: its list's keys, copying, coming back to where one was."""
+
+    where: ClassVar[str] = ""
+    title: ClassVar[str] = ""
+    BINDINGS: ClassVar[list[BindingType]] = [*bindings(LIST)]
+
+    @property
+    def desk(self) -> "Desk":
+        """The screen that all places lie on."""
+        return cast("Desk", self.app.screen_stack[0] if self.app.screen.is_modal else self.screen)
+
+    @property
+    def table(self) -> PagedTable:
+        """The place's list."""
+        return self.query_one(PagedTable)
+
+    @property
+    def line(self) -> Input | None:
+        """The line to type in, where the place has one."""
+        found = self.query(Input)
+        return found.first() if found else None
+
+    def arrive(self, carried: object = None) -> None:
+        """The place comes to the front, with what is carried along from another."""
+        self.settle()
+
+    def settle(self) -> None:
+        """Put the focus where work goes on."""
+        self.table.focus()
+
+    def leave_inner(self) -> bool:
+        """Close what is open within the place; False where nothing is."""
+        return False
+
+    def store_opened(self) -> None:
+        """The store is open now."""
+
+    def store_shut(self, sentence: str) -> None:
+        """The store can't be opened, and why."""
+        self.say_in_list((f"! {sentence}", "bad"), ("Press r to try again; what you typed stays.", "muted"))
+
+    def look_changed(self) -> None:
+        """Units or theme have changed."""
+        self.table.forget()
+
+    def copied(self) -> str:
+        """What the copy key takes: the highlighted row in words."""
+        return ""
+
+    def written(self) -> list[str]:
+        """What the write key puts into a file: the place's list and what belongs to it."""
+        table = self.table
+        lines = ["\t".join(c.title for c in table.columns)]
+        for row in range(min(table.rows.total, 10_000)):
+            cells = table.rows.cells(row) or ()
+            lines.append("\t".join(c if isinstance(c, str) else c[0] for c in cells))
+        return lines
+
+    def say_in_list(self, *lines: tuple[str, str]) -> None:
+        """Words in the place of the list: empty, loading, failed. They say what to do next."""
+        from tui.presenting import harmless, wrapped
+        from tui.widgets.paged_table import NoRows
+
+        width = max(20, (self.table.size.width or 80) - 2)
+        said: list[Line] = [
+            ((f" {part}", ink),) for text, ink in lines for part in wrapped(harmless(text), width)
+        ]
+        self.table.empty = said
+        self.table.show(self.table.columns, NoRows())
+
+    def spelled(self, text: str) -> str:
+        """*text* as this terminal is to have it."""
+        return plain(text) if self.desk.ascii_only else text
+
+    def spelled_lines(self, lines: Sequence[Line]) -> Sequence[Line]:
+        """Lines as this terminal is to have them."""
+        if not self.desk.ascii_only:
+            return lines
+        return [[(plain(text), ink) for text, ink in line] for line in lines]
+
+    def action_row_down(self) -> None:
+        """Next row."""
+        self.table.move(1)
+
+    def action_row_up(self) -> None:
+        """Row before."""
+        self.table.move(-1)
+
+    def action_page_down(self) -> None:
+        """A page down."""
+        self.table.move(self.table.page)
+
+    def action_page_up(self) -> None:
+        """A page up."""
+        self.table.move(-self.table.page)
+
+    def action_first_row(self) -> None:
+        """First row."""
+        self.table.move_to(0)
+
+    def action_last_row(self) -> None:
+        """Last row."""
+        self.table.move_to(self.table.rows.total - 1)
+
+    def action_columns_right(self) -> None:
+        """Columns further right."""
+        self.table.shift(1)
+
+    def action_columns_left(self) -> None:
+        """Columns further left."""
+        self.table.shift(-1)
+
+    def action_open(self) -> None:
+        """Open the highlighted row."""
+        self.table.choose()
+
+    def action_find(self) -> None:
+        """Find a row by a word in it."""
+        self.desk.ask_line("Find", self.desk.finding, self._find)
+
+    def action_find_next(self) -> None:
+        """The next row with the word."""
+        if self.desk.finding:
+            self._seek(self.desk.finding, self.table.cursor + 1)
+
+    def _find(self, word: str) -> None:
+        self.desk.finding = word
+        self._seek(word, self.table.cursor)
+
+    def _seek(self, word: str, start: int) -> None:
+        """Go to the first row from *start* on, round the end, that holds the word."""
+        rows, wanted = self.table.rows, word.casefold()
+        for step in range(rows.total):
+            row = (start + step) % rows.total
+            cells = rows.cells(row) or ()
+            if any(wanted in (c if isinstance(c, str) else c[0]).casefold() for c in cells):
+                self.table.move_to(row)
+                return
+        self.desk.say(f"Nothing here holds “{word}”.")

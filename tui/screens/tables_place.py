@@ -1,0 +1,174 @@
+"""Tables: gauges, sieves, alloys, safety distances, each with its source."""
+
+from collections.abc import Sequence
+from typing import TYPE_CHECKING, Any, ClassVar
+
+from textual.app import ComposeResult
+from textual.binding import BindingType
+from textual.containers import Horizontal
+from textual.widgets import Input
+
+from tui.commands import TABLES
+from tui.presenting import Line, Piece, fit, harmless, inch, significant, width_of
+from tui.screens.keys import bindings
+from tui.screens.place import Place
+from tui.widgets.callout_input import LineInput
+from tui.widgets.line_view import LineView
+from tui.widgets.paged_table import Column, PagedTable
+
+if TYPE_CHECKING:
+    from catalog.report.tables import Row, Table
+
+NAMES = ("gauges", "sieves", "alloys", "guards")
+WIDEST = 34
+MEASURED_ROWS = 200
+
+
+class TableRows:
+    """Rows of a reference table as cells."""
+
+    def __init__(self, rows: "Sequence[Row]", keys: Sequence[str]) -> None:
+        self._rows, self._keys = rows, keys
+        self.total = len(rows)
+
+    def cells(self, row: int) -> Sequence[str | Piece]:
+        """A row's cells."""
+        return [spelled(self._rows[row].get(key)) for key in self._keys]
+
+
+def spelled(value: Any) -> str:
+    """A table's value as text."""
+    if value is None:
+        return "–"
+    if isinstance(value, bool):
+        return "yes" if value else "no"
+    if isinstance(value, (int, float)):
+        return significant(float(value), 6)
+    return harmless(str(value), 200)
+
+
+def with_inches(rows: "Sequence[Row]") -> "list[Row]":
+    """Rows with an inch figure behind each length in mm that has none."""
+    widened = []
+    for row in rows:
+        new: Row = {}
+        for key, value in row.items():
+            new[key] = value
+            other = key.replace("_mm", "_in")
+            if key.endswith("_mm") and other not in row and isinstance(value, (int, float)):
+                new[other] = inch(float(value))
+        widened.append(new)
+    return widened
+
+
+class TablesPlace(Place):
+    """One table at a time."""
+
+    where = TABLES
+    title = "Tables"
+    BINDINGS: ClassVar[list[BindingType]] = [*bindings(TABLES)]
+
+    def __init__(self, *, id: str) -> None:  # noqa: A002
+        super().__init__(id=id)
+        self.name_of_table = NAMES[0]
+        self._tables: dict[str, Table] = {}
+
+    def compose(self) -> ComposeResult:
+        """The line for words, which table, the list, its source."""
+        with Horizontal(classes="typing"):
+            yield LineView(lambda width: [((" Words   ", "key"),)], classes="typing-label")
+            yield LineInput(id="words", placeholder="part of a row: 30, SWG, 1.4404, No. 60")
+        yield LineView(self._which_line, id="status", classes="status")
+        yield PagedTable(id="rows", sign=self.spelled("›"))
+        yield LineView(self._source_line, id="source")
+
+    def on_mount(self) -> None:
+        """The first table."""
+        self._list()
+
+    def store_shut(self, sentence: str) -> None:
+        """Tables need no store."""
+
+    def _table(self) -> "Table":
+        from catalog.report.tables import REFERENCE
+
+        if self.name_of_table not in self._tables:
+            self._tables[self.name_of_table] = REFERENCE[self.name_of_table]()
+        return self._tables[self.name_of_table]
+
+    def _list(self) -> None:
+        table = self._table()
+        rows = self._passing(with_inches(table.rows))
+        keys = list(dict.fromkeys(key for row in rows[:MEASURED_ROWS] for key in row))
+        if rows:
+            columns = [_column(key, rows, index == 0) for index, key in enumerate(keys)]
+            self.table.show(columns, TableRows(rows, keys))
+        else:
+            what_next = "Change the line above; t shows the next table."
+            self.say_in_list(("No row holds these words.", "risk"), (what_next, "muted"))
+        self.query_one("#status", LineView).show(self._which_line)
+        self.query_one("#source", LineView).show(self._source_line)
+
+    def _passing(self, rows: "list[Row]") -> "list[Row]":
+        words = self.query_one("#words", LineInput).value.casefold().split()
+        return [
+            row
+            for row in rows
+            if all(any(word in spelled(value).casefold() for value in row.values()) for word in words)
+        ]
+
+    def on_input_changed(self, event: Input.Changed) -> None:
+        """Narrow the table."""
+        event.stop()
+        self._list()
+
+    def on_input_submitted(self, event: Input.Submitted) -> None:
+        """On to the list."""
+        event.stop()
+        self.table.focus()
+
+    def look_changed(self) -> None:
+        """Other colours."""
+        self.table.forget()
+
+    def _which_line(self, width: int) -> Sequence[Line]:
+        pieces: list[Piece] = [(" ", "text")]
+        for name in NAMES:
+            here = name == self.name_of_table
+            pieces.append((f"[{name}] ", "head") if here else (f" {name}  ", "muted"))
+        total = self.table.rows.total if self.is_mounted else 0
+        right = f"{self.table.cursor + 1} of {total} " if total else ""
+        used = sum(width_of(text) for text, _ in pieces)
+        return self.spelled_lines([[*pieces, (right.rjust(max(0, width - used)), "muted")]])
+
+    def _source_line(self, width: int) -> Sequence[Line]:
+        source = harmless(self._table().source) if self.is_mounted else ""
+        return self.spelled_lines([((fit(f" Source: {source}", width), "muted"),)])
+
+    def on_paged_table_moved(self, event: PagedTable.Moved) -> None:
+        """Say which row."""
+        event.stop()
+        self.query_one("#status", LineView).show(self._which_line)
+
+    def action_next_table(self) -> None:
+        """The next table."""
+        self.name_of_table = NAMES[(NAMES.index(self.name_of_table) + 1) % len(NAMES)]
+        self.table.first_column = 0
+        self._list()
+
+    def action_open(self) -> None:
+        """A row has nothing more to show: the columns move instead."""
+        self.action_columns_right()
+
+    def copied(self) -> str:
+        """The highlighted row."""
+        cells = self.table.rows.cells(self.table.cursor) if self.table.rows.total else None
+        return "" if cells is None else "  ".join(self.spelled(c if isinstance(c, str) else c[0]) for c in cells)
+
+
+def _column(key: str, rows: "Sequence[Row]", first: bool) -> Column:
+    title = key.replace("_mm", " mm").replace("_in", " in").replace("_kg_m3", " kg/m³").replace("_", " ")
+    texts = [spelled(row.get(key)) for row in rows[:MEASURED_ROWS]]
+    width = min(WIDEST, max(width_of(title) + 1, *(width_of(text) for text in texts)))
+    is_number = all(text[:1].isdigit() or text[:1] in ".–-" for text in texts)
+    return Column(key, title, width, "right" if is_number else "left", fixed=first)
