@@ -27,7 +27,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
 def where(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Say where the store is, whether it exists and can be written, and what it holds. Makes nothing."""
     from catalog.search.reader import Filters
-    from catalog.storage.opening import exists, open_store
+    from catalog.storage.existing import exists
+    from catalog.storage.opening import open_store
 
     location = setting.location
     document: dict[str, Any] = {"schema": 1, "store": location, "exists": exists(location)}
@@ -56,7 +57,8 @@ def _where_lines(document: dict[str, Any]) -> list[str]:
 
 def new(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Make a store. One that is there is never written over."""
-    from catalog.storage.opening import exists, open_store
+    from catalog.storage.existing import exists
+    from catalog.storage.opening import open_store
 
     location = setting.location
     if exists(location):
