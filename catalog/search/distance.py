@@ -9,7 +9,7 @@ A cloth that lacks a figure the point has (filter cloth without a rating) comes 
 figure; among themselves these are ordered by the distance over the figures they do have.
 """
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Mapping, Sequence
 from dataclasses import dataclass
 from math import fsum, log, sqrt
 
@@ -80,20 +80,20 @@ def is_comparable(point: Point, cloth: Cloth) -> bool:
 
 def nearness(summands: tuple[Term, ...], cloth: Cloth) -> Nearness:
     """Place a comparable *cloth*, by the better of the two ways round; ties are not turned."""
-    straight = _sum(summands, cloth, turned=False)
-    turned = _sum(summands, cloth, turned=True)
+    names = {name for term in summands for name in (term.straight, term.turned)}
+    found_ln = {name: _ln(FIGURES[name](cloth)) for name in names}
+    straight = _sum([(term, found_ln[term.straight]) for term in summands])
+    turned = _sum([(term, found_ln[term.turned]) for term in summands])
     is_turned = turned < straight
     missing, squared = turned if is_turned else straight
     return Nearness(missing, sqrt(squared), is_turned)
 
 
-def _sum(summands: tuple[Term, ...], cloth: Cloth, turned: bool) -> tuple[int, float]:
+def _ln(figure: float | None) -> float | None:
+    return None if figure is None else log(figure)
+
+
+def _sum(pairs: Sequence[tuple[Term, float | None]]) -> tuple[int, float]:
     """Count of missing figures and d². fsum rounds once, so that mirrored cloths tie exactly."""
-    missing, parts = 0, []
-    for term in summands:
-        found = FIGURES[term.turned if turned else term.straight](cloth)
-        if found is None:
-            missing += 1
-        else:
-            parts.append(term.weight * (term.asked_ln - log(found)) ** 2)
-    return missing, fsum(parts)
+    parts = [term.weight * (term.asked_ln - found) ** 2 for term, found in pairs if found is not None]
+    return len(pairs) - len(parts), fsum(parts)

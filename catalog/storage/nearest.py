@@ -1,18 +1,55 @@
-"""The nearest cloths of a store, exactly as search.distance defines them."""
+"""The nearest cloths of a store, exactly as search.distance defines them, reading as little as it can.
 
-from collections.abc import Iterable, Mapping
+Two stages: ids with their d² from a covering index, inside windows that grow until they hold the k-th nearest
+for certain; then the rows of those few. The order of the answer is made by search.distance itself; the d² of
+the statement is trusted to a HAIR, and whoever lies that close to the k-th is looked at.
+"""
 
-from sqlalchemy import Connection, text
+from collections.abc import Iterable
+from dataclasses import dataclass, replace
+from math import inf, sqrt
+
+from sqlalchemy import Connection
 
 from catalog.cloth import Cloth
+from catalog.construction import Weave
 from catalog.search.distance import nearness, terms
-from catalog.search.filtering import turned_ranges
-from catalog.search.reader import Filters, Point, Range
+from catalog.search.reader import Filters, Point
+from catalog.search.window import Bounds, Layout, implied, largest_radius, layout, least_radius, windows
 from catalog.storage.conditions import Conditions, add_filters, weaves_asked
-from catalog.storage.rows import cloth_of_row
-from catalog.storage.selecting import CLOTHS
+from catalog.storage.edges import edges
+from catalog.storage.selecting import cloths_by_id
+from catalog.storage.sources import EVERYTHING, Source, source
+from catalog.storage.squared import squared_distance
 
 Found = tuple[Cloth, float, bool]
+Near = tuple[str, float]
+HAIR = 1e-11
+"""d² of the statement and of Python agree to this."""
+SPARE = 14
+"""Rows asked for beyond k, in case several lie as far as the k-th."""
+FIRST_REACH = 0.02
+"""How far beyond the nearest possible cloth is looked at first: 1 % in aperture."""
+
+
+def nearest_cloths(connection: Connection, point: Point, k: int, filters: Filters) -> list[Found]:
+    """The *k* nearest inside *filters*; those without a rating that is asked for come last."""
+    if not point.is_filter or point.rating_um is None:
+        return _nearest(connection, point, k, filters)
+    rated = _nearest(connection, point, k, filters, "c.ln_rating IS NOT NULL")
+    unrated = replace(point, rating_um=None)
+    return rated + _nearest(connection, unrated, k - len(rated), filters, "c.ln_rating IS NULL")
+
+
+def _nearest(connection: Connection, point: Point, k: int, filters: Filters, only: str = "") -> list[Found]:
+    weaves = weaves_asked(filters, point.is_filter)
+    if k <= 0 or not weaves:
+        return []
+    conditions = Conditions()
+    conditions.add(only)
+    add_filters(conditions, filters, weaves)
+    ids = Search(connection, point, conditions, k).run(layout(point), weaves, filters)
+    return ranked(point, cloths_by_id(connection, ids))[:k]
 
 
 def ranked(point: Point, cloths: Iterable[Cloth]) -> list[Found]:
@@ -23,22 +60,56 @@ def ranked(point: Point, cloths: Iterable[Cloth]) -> list[Found]:
     return [(cloth, near.distance, near.turned) for cloth, near in placed]
 
 
-def nearest_cloths(connection: Connection, point: Point, k: int, filters: Filters) -> list[Found]:
-    """The *k* nearest inside *filters*."""
-    return boxed_cloths(connection, point, {}, filters)[:k]
+@dataclass(slots=True)
+class Search:
+    """One search in one snapshot: the point, what a cloth must fulfil, how many are wanted."""
 
+    connection: Connection
+    point: Point
+    conditions: Conditions
+    k: int
 
-def boxed_cloths(
-    connection: Connection, point: Point, ranges: Mapping[str, Range], filters: Filters
-) -> list[Found]:
-    """Every comparable cloth inside *ranges*, either way round, and inside *filters*."""
-    weaves = weaves_asked(filters, point.is_filter)
-    if not weaves:
-        return []
-    conditions = Conditions()
-    add_filters(conditions, filters, weaves)
-    ways = [conditions.within(way) for way in (ranges, turned_ranges(ranges))]
-    if all(ways):
-        conditions.add(f"(({ways[0]}) OR ({ways[1]}))")
-    sql = text(f"{CLOTHS} WHERE {conditions.sql}")
-    return ranked(point, map(cloth_of_row, connection.execute(sql, conditions.values)))
+    def run(self, plan: Layout | None, weaves: frozenset[Weave], filters: Filters) -> list[str]:
+        """Ids of the *k* nearest and of whoever lies as far as the last of them, in no order."""
+        if plan is None:
+            return self._cut(EVERYTHING, self._near(EVERYTHING))
+        bounds = edges(self.connection, plan, weaves, filters.alloys).meet(implied(filters, plan))
+        return [] if bounds.is_empty else self._grow(plan, bounds)
+
+    def _grow(self, plan: Layout, bounds: Bounds) -> list[str]:
+        """Widen until the k-th nearest is inside for certain, or everything is."""
+        nearest, furthest = least_radius(plan, bounds), largest_radius(plan, bounds)
+        reach, enough = FIRST_REACH, inf
+        while True:
+            radius = min(sqrt(nearest**2 + reach**2), enough, furthest)
+            cut = windows(plan, bounds, radius)
+            read = source(plan, cut) if cut else None
+            near = self._near(read) if read else []
+            inside = sum(1 for _, squared in near if squared <= radius**2)
+            if inside >= self.k or radius >= min(enough, furthest):
+                return self._cut(read, near) if read else []
+            if len(near) >= self.k:
+                enough = sqrt(near[self.k - 1][1] + HAIR)
+            reach *= min(4.0, 1.2 * sqrt(self.k / max(inside, 1)))
+
+    def _near(self, read: Source, most: float | None = None) -> list[Near]:
+        """(id, d²), nearest first: a few more than *k*, or all up to a d² of *most*."""
+        squared = squared_distance(self.point)
+        limit = f" LIMIT {self.k + SPARE}" if most is None else ""
+        bound = "" if most is None else f" AND {squared} <= {most!r}"
+        conditions = self.conditions.driver_sql(self.connection.dialect.paramstyle)
+        sql = (
+            f"{read.ahead}SELECT c.id, {squared} AS d2 FROM {read.tables} "
+            f"WHERE {read.where} AND {conditions}{bound} ORDER BY d2, c.id{limit}"
+        )
+        rows = self.connection.exec_driver_sql(sql, self.conditions.values)
+        return [(cloth_id, d2) for cloth_id, d2 in rows.cursor.fetchall()]
+
+    def _cut(self, read: Source, near: list[Near]) -> list[str]:
+        """Leave out what lies beyond the k-th by more than a hair."""
+        if len(near) <= self.k:
+            return [cloth_id for cloth_id, _ in near]
+        most = near[self.k - 1][1] + HAIR
+        if near[-1][1] <= most and len(near) == self.k + SPARE:
+            near = self._near(read, most)
+        return [cloth_id for cloth_id, squared in near if squared <= most]

@@ -49,7 +49,6 @@ def cloth_of_row(row: Sequence[Any]) -> Cloth:
     """The cloth in a row of CLOTH_COLUMNS."""
     (cid, name, weave, warp_pitch, warp_wire, weft_pitch, weft_wire, alloy, crimp, finish) = row[:10]
     (declared, unit_system, source, um, kind, method, grade, standard, demo) = row[10:19]
-    (open_area, mass, aperture, count) = row[19:FIGURES_FROM]
     return Cloth(
         id=cid,
         name=name,
@@ -69,10 +68,7 @@ def cloth_of_row(row: Sequence[Any]) -> Cloth:
         grade=grade,
         standard=standard,
         demo=bool(demo),
-        stated_open_area_pct=open_area,
-        stated_mass_kg_m2=mass,
-        stated_aperture_mm=aperture,
-        stated_count_per_in=count,
+        **dict(zip(STATED, row[19:FIGURES_FROM], strict=True)),
     )
 
 

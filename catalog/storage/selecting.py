@@ -22,8 +22,6 @@ SORT_COLUMNS = {
 }
 BATCH = 500
 """Ids per statement, below every driver's limit."""
-ONCE: dict[str, Any] = {"compiled_cache": None}
-"""For statements that won't come again: not worth a place among the compiled."""
 
 
 def select_cloths(

@@ -11,7 +11,7 @@ from catalog.errors import ReadOnlyStoreError
 from catalog.search.filtering import NO_FILTERS
 from catalog.search.reader import Filters, Point, Range
 from catalog.stock.lots import Lot
-from catalog.storage import nearest, selecting
+from catalog.storage import boxing, nearest, selecting
 from catalog.storage.engine import explained
 
 Found = tuple[Cloth, float, bool]
@@ -49,7 +49,7 @@ class Store:
     def box(self, point: Point, ranges: Mapping[str, Range], filters: Filters = NO_FILTERS) -> Sequence[Found]:
         """Return every comparable cloth inside *ranges*, either way round, in the order of nearest."""
         with self.reading() as connection:
-            return nearest.boxed_cloths(connection, point, ranges, filters)
+            return boxing.boxed_cloths(connection, point, ranges, filters)
 
     def select(self, filters: Filters, sort: str = "aperture", limit: int | None = None) -> Sequence[Cloth]:
         """Return the cloths inside *filters*, ascending, those without the figure last, ties by id."""

@@ -115,6 +115,7 @@ Index(
     "ix_cloth_pitches", *(cloth.c[n] for n in ("weave", *PITCH_AXES, "ln_rating", "ln_open_area", "alloy", "id"))
 )
 Index("ix_cloth_open_area", cloth.c.weave, cloth.c.ln_open_area, cloth.c.id)
+Index("ix_cloth_wires", cloth.c.weave, cloth.c.ln_wire_mean, cloth.c.ln_wire_skew, cloth.c.id)
 Index("ix_cloth_rating", cloth.c.weave, cloth.c.ln_rating, cloth.c.id)
 
 article = Table(
@@ -123,10 +124,12 @@ article = Table(
     Column("id", String, primary_key=True),
     Column("cloth", ForeignKey("cloth.id"), nullable=False, index=True),
     Column("part_number", Text, nullable=False),
+    Column("seller", Text, nullable=False),
     Column("price_minor_per_m2", BigInteger),
     Column("currency", String),
     Column("minimum_mm2", BigInteger),
     Column("lead_days", Integer),
+    Column("roll_sizes_mm", Text, nullable=False),
     Column("source", Text, nullable=False),
     Column("demo", Boolean, nullable=False),
     CheckConstraint("(price_minor_per_m2 IS NULL) = (currency IS NULL)", name="price_has_currency"),
@@ -159,6 +162,9 @@ lot = Table(
     Column("location", Text, nullable=False),
     Column("heat", Text),
     Column("certificate", String),
+    Column("received", String),
+    Column("cost_minor_per_m2", BigInteger),
+    Column("currency", String),
     Column("source", Text, nullable=False),
     Column("demo", Boolean, nullable=False),
     Column("version", Integer, nullable=False),

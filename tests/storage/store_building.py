@@ -14,7 +14,7 @@ from catalog.storage.engine import sqlite_engine
 from catalog.storage.migrating import upgrade
 from catalog.storage.rows import Declared
 from catalog.storage.store import Store
-from catalog.storage.writing import add_cloths, receive_lots
+from catalog.storage.writing import Arrival, add_cloths, receive_lots
 
 MM = "mm"
 StoreOf = Callable[..., tuple[Store, ListReader]]
@@ -68,6 +68,6 @@ def fill_file(path: Path, cloths: Iterable[Cloth], lots: Iterable[Lot] = ()) -> 
     with engine.connect() as bare, bare.execution_options(is_writer=True).begin():
         seed_meta(bare, with_demo=True)
         add_cloths(bare, [(cloth, declared_of(cloth)) for cloth in cloths])
-        receive_lots(bare, [(lot, "made for a test") for lot in lots], "test", "")
+        receive_lots(bare, [Arrival(lot, "made for a test") for lot in lots], "test", "")
     engine.dispose()
     return path

@@ -10,7 +10,7 @@ from store_building import StoreOf, fill_file, make_cloth, make_lot
 from catalog.errors import StoreError
 from catalog.search.reader import Filters
 from catalog.storage.opening import open_store
-from catalog.storage.writing import receive_lots
+from catalog.storage.writing import Arrival, receive_lots
 
 WORKER = """
 import sys
@@ -38,7 +38,7 @@ def test_four_programs_taking_from_one_roll_lose_no_millimetre(tmp_path: Path) -
 def test_a_lot_of_no_cloth_is_refused(store_of: StoreOf) -> None:
     store, _ = store_of([make_cloth("a", ("0.41", "0.16"))])
     with pytest.raises(StoreError, match="FOREIGN KEY"), store.transaction() as connection:
-        receive_lots(connection, [(make_lot("R-9", "nosuch"), "test")], "test", "")
+        receive_lots(connection, [Arrival(make_lot("R-9", "nosuch"), "test")], "test", "")
     assert store.lots(["nosuch"]) == {}
 
 
@@ -52,7 +52,7 @@ def test_a_transaction_that_fails_leaves_nothing_behind(store_of: StoreOf) -> No
     store, _ = store_of([make_cloth("a", ("0.41", "0.16"))])
     good, bad = make_lot("R-1", "a"), make_lot("R-2", "nosuch")
     with pytest.raises(StoreError), store.transaction() as connection:
-        receive_lots(connection, [(good, "test"), (bad, "test")], "test", "")
+        receive_lots(connection, [Arrival(good, "test"), Arrival(bad, "test")], "test", "")
     assert store.lots(["a"]) == {}
 
 

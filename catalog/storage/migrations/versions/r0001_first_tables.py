@@ -129,6 +129,7 @@ def upgrade() -> None:
         unique=False,
     )
     op.create_index("ix_cloth_rating", "cloth", ["weave", "ln_rating", "id"], unique=False)
+    op.create_index("ix_cloth_wires", "cloth", ["weave", "ln_wire_mean", "ln_wire_skew", "id"], unique=False)
     op.create_table(
         "decision",
         sa.Column("id", sa.Integer(), nullable=False),
@@ -169,10 +170,12 @@ def upgrade() -> None:
         sa.Column("id", sa.String(), nullable=False),
         sa.Column("cloth", sa.String(), nullable=False),
         sa.Column("part_number", sa.Text(), nullable=False),
+        sa.Column("seller", sa.Text(), nullable=False),
         sa.Column("price_minor_per_m2", sa.BigInteger(), nullable=True),
         sa.Column("currency", sa.String(), nullable=True),
         sa.Column("minimum_mm2", sa.BigInteger(), nullable=True),
         sa.Column("lead_days", sa.Integer(), nullable=True),
+        sa.Column("roll_sizes_mm", sa.Text(), nullable=False),
         sa.Column("source", sa.Text(), nullable=False),
         sa.Column("demo", sa.Boolean(), nullable=False),
         sa.CheckConstraint(
@@ -196,6 +199,9 @@ def upgrade() -> None:
         sa.Column("location", sa.Text(), nullable=False),
         sa.Column("heat", sa.Text(), nullable=True),
         sa.Column("certificate", sa.String(), nullable=True),
+        sa.Column("received", sa.String(), nullable=True),
+        sa.Column("cost_minor_per_m2", sa.BigInteger(), nullable=True),
+        sa.Column("currency", sa.String(), nullable=True),
         sa.Column("source", sa.Text(), nullable=False),
         sa.Column("demo", sa.Boolean(), nullable=False),
         sa.Column("version", sa.Integer(), nullable=False),
