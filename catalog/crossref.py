@@ -10,8 +10,8 @@ from catalog.construction import Weave
 from catalog.errors import InputError
 from catalog.search.candidate import Candidate, Finding, Verdict
 from catalog.search.cautions import cautions
-from catalog.search.judging import judge, order, stock_lines
-from catalog.search.pool import Found, gather
+from catalog.search.judging import assess, describe, order
+from catalog.search.pool import gather
 from catalog.search.reader import Reader
 from catalog.search.rules import HOUSE_RULES, HouseRules
 from catalog.target import Need, Purpose, Target
@@ -63,11 +63,13 @@ def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> 
     targets = tuple(_aim(reading, request, rules) for reading in readings)
     judged = [_judge_all(target, reader, request, rules) for target in targets]
     any_will_do = understanding.status is not Status.ASK
-    merged = judged[0] if len(judged) == 1 else _merge(targets, judged, any_will_do, rules)
-    shown = order(merged)[: request.limit]
-    with_stock = _with_stock(shown, targets, reader)
+    merged = _merge(targets, judged, any_will_do, rules)
+    shown = order([candidate for candidate, _ in merged])[: request.limit]
+    aimed = {candidate.cloth.id: target for candidate, target in merged}
+    lots = reader.lots([c.cloth.id for c in shown])
+    described = tuple(describe(aimed[c.cloth.id], c, lots.get(c.cloth.id, ()), rules) for c in shown)
     said = dict.fromkeys(line for target in targets for line in cautions(target, request.text))
-    return Answer(request, understanding, targets, tuple(with_stock), understanding.question, tuple(said))
+    return Answer(request, understanding, targets, described, understanding.question, tuple(said))
 
 
 def _taken(understanding: Understanding, label: str | None) -> tuple[Reading, ...]:
@@ -112,53 +114,37 @@ def _aim(reading: Reading, request: Request, rules: HouseRules) -> Target:
 
 def _judge_all(target: Target, reader: Reader, request: Request, rules: HouseRules) -> list[Candidate]:
     found = gather(target, reader, request.limit, request.in_stock, rules)
-    return [_judge(target, one, rules) for one in found]
+    return [assess(target, cloth, distance, turned, rules) for cloth, distance, turned in found]
 
 
-def _judge(target: Target, found: Found, rules: HouseRules) -> Candidate:
-    cloth, distance, turned = found
-    return judge(target, cloth, distance, turned, (), rules)
+Aimed = tuple[Candidate, Target]
 
 
 def _merge(
-    targets: Sequence[Target],
-    judged: Sequence[Sequence[Candidate]],
-    any_will_do: bool,
-    rules: HouseRules,
-) -> list[Candidate]:
+    targets: Sequence[Target], judged: Sequence[Sequence[Candidate]], any_will_do: bool, rules: HouseRules
+) -> list[Aimed]:
     """One candidate a cloth: accepted alternatives give the better verdict, open readings must agree."""
+    if len(targets) == 1:
+        return [(candidate, targets[0]) for candidate in judged[0]]
     by_id = [{c.cloth.id: c for c in candidates} for candidates in judged]
-    every = {cid: c for found in by_id for cid, c in found.items()}
+    every = {cid: c for found in reversed(by_id) for cid, c in found.items()}
     merged = []
     for cid, known in every.items():
         views = [
-            found.get(cid) or judge(target, known.cloth, None, known.turned, (), rules)
+            (found.get(cid) or assess(target, known.cloth, None, known.turned, rules), target)
             for target, found in zip(targets, by_id, strict=True)
         ]
-        merged.append(min(views, key=lambda c: c.verdict.rank) if any_will_do else _agreed(targets, views))
+        merged.append(min(views, key=lambda view: view[0].verdict.rank) if any_will_do else _agreed(views))
     return merged
 
 
-def _agreed(targets: Sequence[Target], views: Sequence[Candidate]) -> Candidate:
-    first = views[0]
-    if len({view.verdict for view in views}) == 1:
-        return first
-    said = "; ".join(
-        f"as {target.reading.label}: {view.verdict}" for target, view in zip(targets, views, strict=True)
-    )
+def _agreed(views: Sequence[Aimed]) -> Aimed:
+    first, target = views[0]
+    if len({view.verdict for view, _ in views}) == 1:
+        return views[0]
+    said = "; ".join(f"as {target.reading.label}: {view.verdict}" for view, target in views)
     text = f"The readings disagree: {said}."
-    finding = Finding("readings", None, text, "")
     by_purpose = dict.fromkeys(first.by_purpose, Verdict.CANNOT_SAY)
-    return replace(
-        first,
-        verdict=Verdict.CANNOT_SAY,
-        by_purpose=by_purpose,
-        harm_side=False,
-        findings=(finding, *first.findings),
-        reason=text,
-    )
-
-
-def _with_stock(shown: Sequence[Candidate], targets: Sequence[Target], reader: Reader) -> list[Candidate]:
-    lots = reader.lots([c.cloth.id for c in shown])
-    return [replace(c, stock=stock_lines(lots.get(c.cloth.id, ()), targets[0])) for c in shown]
+    finding = Finding("readings", None, text, "")
+    open_ = replace(first, verdict=Verdict.CANNOT_SAY, by_purpose=by_purpose, harm_side=False)
+    return replace(open_, findings=(finding,), reason=text), target

@@ -43,10 +43,10 @@ def aperture_rule(cloth: Cloth) -> Iterator[Oddity]:
     if stated is None or found is None or _agree(stated, found):
         return
     if _agree(stated, float(cloth.construction.warp.wire_mm)):
-        yield Oddity(cloth.id, "aperture and wire swapped", f"{stated:g} mm is the wire", "exchange the two columns")
+        yield Oddity(cloth.id, "aperture and wire swapped", f"{stated:g} mm is the wire", "exchange the two")
         return
     value = f"stated {stated:g} mm, p − d = {found:.4g} mm"
-    yield Oddity(cloth.id, "p ≠ w + d", value, _slip(stated / found) or "measure pitch and wire; correct the odd one")
+    yield Oddity(cloth.id, "p ≠ w + d", value, _slip(stated / found) or "measure pitch and wire")
 
 
 def count_rule(cloth: Cloth) -> Iterator[Oddity]:
@@ -72,7 +72,7 @@ def open_area_rule(cloth: Cloth) -> Iterator[Oddity]:
     if stated is None:
         return
     if cloth.construction.is_filter:
-        yield Oddity(cloth.id, "filter cloth with an open area", f"{stated:g} %", "clear it: it has no straight opening")
+        yield Oddity(cloth.id, "filter cloth with an open area", f"{stated:g} %", "clear it: no straight opening")
     elif found is not None and abs(stated - found) > 1.0:
         value = f"stated {stated:g} %, computed {found:.1f} %"
         yield Oddity(cloth.id, "open area does not follow", value, "recompute it; else check the wire")
@@ -82,7 +82,8 @@ def filter_opening_rule(cloth: Cloth) -> Iterator[Oddity]:
     """Filter cloth has no square opening."""
     if cloth.construction.is_filter and cloth.stated_aperture_mm is not None:
         value = f"{cloth.stated_aperture_mm:g} mm"
-        yield Oddity(cloth.id, "filter cloth with a square opening", value, "enter it as a rating, with its method")
+        rule = "filter cloth with a square opening"
+        yield Oddity(cloth.id, rule, value, "enter it as a rating with its method")
 
 
 def mass_rule(cloth: Cloth) -> Iterator[Oddity]:
@@ -156,7 +157,7 @@ def audit(cloths: Iterable[Cloth]) -> Iterator[Oddity]:
         for rule in RULES:
             yield from rule(cloth)
     for pair in listed_twice(seen):
-        yield Oddity(pair.one.id, "listed twice", f"the same cloth as {pair.other.id}", "make one an alias of the other")
+        yield Oddity(pair.one.id, "listed twice", f"the same as {pair.other.id}", "make one an alias of the other")
 
 
 def _agree(one: float, other: float) -> bool:

@@ -1,7 +1,8 @@
 """A cloth set against a target, direction by direction, in exact millimetres: facts, no judgement."""
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from fractions import Fraction
+from functools import lru_cache
 
 from catalog.callout.reading import Side
 from catalog.cloth import Cloth
@@ -22,7 +23,7 @@ def _rounding(side: Side, name: str) -> Fraction:
 
 @dataclass(frozen=True, slots=True)
 class Direction:
-    """Warp or weft: what is asked, what is found, what may differ. mm."""
+    """Warp or weft: what is asked, what is found, what may differ. mm, exact."""
 
     name: str
     asked_aperture: Fraction | None
@@ -33,23 +34,12 @@ class Direction:
     aperture_rounding: Fraction
     """Half the last written unit, within the rule for 'same'."""
     wire_rounding: Fraction
-
-    @property
-    def aperture_off(self) -> Fraction | None:
-        """Found less asked."""
-        return None if self.asked_aperture is None else self.found.aperture_mm - self.asked_aperture
-
-    @property
-    def wire_off(self) -> Fraction | None:
-        """Found less asked."""
-        return None if self.asked_wire is None else self.found.wire_mm - self.asked_wire
-
-    @property
-    def section(self) -> Fraction | None:
-        """Offered d²/p over asked d²/p."""
-        if self.asked_wire is None or self.asked_pitch is None:
-            return None
-        return (self.found.wire_mm**2 / self.found.pitch_mm) / (self.asked_wire**2 / self.asked_pitch)
+    aperture_off: Fraction | None
+    """Found less asked."""
+    wire_off: Fraction | None
+    """Found less asked."""
+    section: Fraction | None
+    """Offered d²/p over asked d²/p."""
 
     @property
     def is_same(self) -> bool:
@@ -69,29 +59,14 @@ class Comparison:
     """The cloth's construction, turned where it is offered turned."""
     turned: bool
     directions: tuple[Direction, Direction]
-
-    @property
-    def section(self) -> Fraction | None:
-        """The weaker direction's section ratio."""
-        ratios = [d.section for d in self.directions if d.section is not None]
-        return min(ratios) if ratios else None
-
-    @property
-    def asked_open(self) -> Fraction | None:
-        """Open area that follows from the asked apertures and pitches, as a share; None where not asked."""
-        return _open([(d.asked_aperture, d.asked_pitch) for d in self.directions])
-
-    @property
-    def found_open(self) -> Fraction:
-        """Open area of the cloth, as a share."""
-        share = _open([(d.found.aperture_mm, d.found.pitch_mm) for d in self.directions])
-        return share if share is not None else ZERO
-
-    @property
-    def open_points(self) -> Fraction | None:
-        """Found less asked open area, in points."""
-        asked = self.asked_open
-        return None if asked is None else (self.found_open - asked) * 100
+    section: Fraction | None
+    """The weaker direction's section ratio."""
+    asked_open: Fraction | None
+    """Open area that follows from the asked apertures and pitches, as a share; None where not asked."""
+    found_open: Fraction
+    """Open area of the cloth, as a share."""
+    open_points: Fraction | None
+    """Found less asked open area, in points."""
 
     @property
     def asks_wire(self) -> bool:
@@ -104,27 +79,61 @@ class Comparison:
         return all(d.asked_aperture is not None for d in self.directions)
 
 
-def _open(pairs: list[tuple[Fraction | None, Fraction | None]]) -> Fraction | None:
-    share = Fraction(1)
-    for aperture, pitch in pairs:
-        if aperture is None or pitch is None:
-            return None
-        share *= aperture / pitch
-    return share
+Pair = tuple[Fraction | None, Fraction | None]
 
 
-def _direction(name: str, side: Side, found: Wires, tolerance: float | None, rules: HouseRules) -> Direction:
+@lru_cache(maxsize=4096)
+def _open(warp: Pair, weft: Pair) -> Fraction | None:
+    """Open share of (aperture, pitch) both ways."""
+    if warp[0] is None or warp[1] is None or weft[0] is None or weft[1] is None:
+        return None
+    share = warp[0] / warp[1]
+    return share**2 if warp == weft else share * (weft[0] / weft[1])
+
+
+@dataclass(frozen=True, slots=True)
+class _Asked:
+    """One side of the target, worked out once for all cloths."""
+
+    aperture: Fraction | None
+    wire: Fraction | None
+    pitch: Fraction | None
+    section: Fraction | None
+    tolerance: Fraction | None
+    aperture_rounding: Fraction
+    wire_rounding: Fraction
+
+
+@lru_cache(maxsize=32)
+def _asked(side: Side, tolerance: float | None, rules: HouseRules) -> _Asked:
     aperture = side.aperture.mm if side.aperture else None
     wire = side.wire.mm if side.wire else None
+    pitch = side.pitch.mm if side.pitch else None
+    return _Asked(
+        aperture,
+        wire,
+        pitch,
+        wire**2 / pitch if wire is not None and pitch else None,
+        None if tolerance is None else Fraction(tolerance).limit_denominator(10**9),
+        min(_rounding(side, "aperture"), (aperture or ZERO) * rules.same_aperture),
+        min(_rounding(side, "wire"), (wire or ZERO) * rules.same_wire),
+    )
+
+
+def _direction(name: str, asked: _Asked, found: Wires) -> Direction:
+    section = None if not asked.section else found.wire_mm**2 / found.pitch_mm / asked.section
     return Direction(
-        name=name,
-        asked_aperture=aperture,
-        asked_wire=wire,
-        asked_pitch=side.pitch.mm if side.pitch else None,
-        found=found,
-        tolerance=None if tolerance is None else Fraction(tolerance).limit_denominator(10**9),
-        aperture_rounding=min(_rounding(side, "aperture"), (aperture or ZERO) * rules.same_aperture),
-        wire_rounding=min(_rounding(side, "wire"), (wire or ZERO) * rules.same_wire),
+        name,
+        asked.aperture,
+        asked.wire,
+        asked.pitch,
+        found,
+        asked.tolerance,
+        asked.aperture_rounding,
+        asked.wire_rounding,
+        None if asked.aperture is None else found.aperture_mm - asked.aperture,
+        None if asked.wire is None else found.wire_mm - asked.wire,
+        section,
     )
 
 
@@ -132,6 +141,18 @@ def compare(target: Target, cloth: Cloth, turned: bool, rules: HouseRules) -> Co
     """Set *cloth* against *target*, warp to warp, or warp to weft where it is offered *turned*."""
     made = cloth.construction.turned() if turned else cloth.construction
     allowed = target.tolerance
-    warp = _direction("warp", target.warp, made.warp, allowed.warp_mm if allowed else None, rules)
-    weft = _direction("weft", target.weft, made.weft, allowed.weft_mm if allowed else None, rules)
-    return Comparison(target, cloth, made, turned, (warp, weft))
+    sides = (
+        _asked(target.warp, allowed.warp_mm if allowed else None, rules),
+        _asked(target.weft, allowed.weft_mm if allowed else None, rules),
+    )
+    warp = _direction("warp", sides[0], made.warp)
+    alike = sides[0] == sides[1] and made.warp == made.weft
+    weft = replace(warp, name="weft") if alike else _direction("weft", sides[1], made.weft)
+    sections = [d.section for d in (warp, weft) if d.section is not None]
+    asked_open = _open((warp.asked_aperture, warp.asked_pitch), (weft.asked_aperture, weft.asked_pitch))
+    found_open = (
+        _open((made.warp.aperture_mm, made.warp.pitch_mm), (made.weft.aperture_mm, made.weft.pitch_mm)) or ZERO
+    )
+    points = None if asked_open is None else (found_open - asked_open) * 100
+    section = min(sections) if sections else None
+    return Comparison(target, cloth, made, turned, (warp, weft), section, asked_open, found_open, points)

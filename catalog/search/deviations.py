@@ -2,6 +2,7 @@
 
 from collections.abc import Iterator
 from fractions import Fraction
+from functools import lru_cache
 
 from catalog.construction import Construction, Weave, Wires
 from catalog.figures import figures
@@ -46,9 +47,7 @@ def _open_area(c: Comparison, rules: HouseRules) -> Deviation:
     if asked is None or off is None:
         return Deviation("open_area", None, found, None, "points")
     limit = rules.open_area_points
-    return Deviation(
-        "open_area", float(asked * 100), found, float(off), "points", float(limit), abs(off) <= limit
-    )
+    return Deviation("open_area", float(asked * 100), found, float(off), "points", float(limit), abs(off) <= limit)
 
 
 def _section(c: Comparison, rules: HouseRules) -> Deviation:
@@ -56,9 +55,7 @@ def _section(c: Comparison, rules: HouseRules) -> Deviation:
         return Deviation("section", None, None, None, "%")
     off = float((c.section - 1) * 100)
     limit = float((rules.section_least - 1) * 100)
-    return Deviation(
-        "section", 100.0, float(c.section * 100), off, "%", limit, c.section >= rules.section_least
-    )
+    return Deviation("section", 100.0, float(c.section * 100), off, "%", limit, c.section >= rules.section_least)
 
 
 def _mass(c: Comparison) -> Deviation:
@@ -71,14 +68,17 @@ def _mass(c: Comparison) -> Deviation:
 
 def asked_mass_kg_m2(c: Comparison) -> float | None:
     """Mass per area of what is asked, kg/m²; in the offered alloy's density where no known alloy was asked."""
-    if any(d.asked_pitch is None or d.asked_wire is None for d in c.directions):
-        return None
     alloy = c.target.reading.alloy
     density = alloys.density_kg_m3(alloy) if alloy else None
     if density is None and c.made.alloy:
         density = alloys.density_kg_m3(c.made.alloy)
-    weave = c.target.weave or Weave.PLAIN
-    wires = [Wires(d.asked_pitch, d.asked_wire) for d in c.directions if d.asked_pitch and d.asked_wire]
-    if len(wires) < 2:
+    warp, weft = c.directions
+    if not (warp.asked_pitch and warp.asked_wire and weft.asked_pitch and weft.asked_wire) or density is None:
         return None
-    return figures(Construction(weave, wires[0], wires[1]), density).mass_kg_m2
+    wires = Wires(warp.asked_pitch, warp.asked_wire), Wires(weft.asked_pitch, weft.asked_wire)
+    return _mass_of(c.target.weave or Weave.PLAIN, *wires, density)
+
+
+@lru_cache(maxsize=64)
+def _mass_of(weave: Weave, warp: Wires, weft: Wires, density_kg_m3: float) -> float | None:
+    return figures(Construction(weave, warp, weft), density_kg_m3).mass_kg_m2

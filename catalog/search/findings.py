@@ -21,9 +21,7 @@ def findings(c: Comparison, purposes: tuple[Purpose, ...], rules: HouseRules) ->
     found += _section(c, rules)
     found += _purpose_lines(c, purposes, rules)
     if c.turned:
-        text = (
-            "Offered turned by 90°: its warp lies along your weft, so width and strength directions change."
-        )
+        text = "Offered turned by 90°: its warp lies along your weft, so width and strength directions change."
         found.append(Finding("turned", True, text))
     return found
 

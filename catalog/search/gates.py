@@ -50,9 +50,7 @@ def alloy_gate(c: Comparison) -> Finding | None:
     if asked is None:
         return Finding("alloy", True, f"No alloy was asked; this is {_named(offered)}.")
     if offered is None:
-        return Finding(
-            "alloy", None, f"Asked alloy is {_named(asked)}; the alloy of this cloth is not on record."
-        )
+        return Finding("alloy", None, f"Asked alloy is {_named(asked)}; the alloy of this cloth is not on record.")
     if asked == offered:
         return None
     gate = alloys.gate(asked, offered)

@@ -1,6 +1,7 @@
 """A cloth, judged: gates, comparison, findings, verdicts, penalty and lots in one candidate."""
 
 from collections.abc import Sequence
+from dataclasses import replace
 
 from catalog.cloth import Cloth
 from catalog.search.candidate import Candidate, Finding, Fit, StockLine, Verdict
@@ -31,16 +32,18 @@ def judge(
     rules: HouseRules = HOUSE_RULES,
 ) -> Candidate:
     """Set *cloth* against *target* and say what differs and whether it matters."""
+    return describe(target, assess(target, cloth, distance, turned, rules), lots, rules)
+
+
+def assess(
+    target: Target, cloth: Cloth, distance: float | None, turned: bool, rules: HouseRules = HOUSE_RULES
+) -> Candidate:
+    """The verdict and penalty alone: enough to order a list by, at a fraction of the cost of the words."""
     c = compare(target, cloth, turned, rules)
     purposes = target.purposes or SIDE_BY_SIDE
-    gates = gate_findings(c)
-    by_purpose, details = _verdicts(c, purposes, gates, rules)
-    judged = [by_purpose[p.value] for p in purposes]
-    verdict = max(judged, key=lambda v: v.rank)
-    harmed = verdict in GOOD and any(
-        is_to_harm_side(p, c) for p in purposes if not cloth.construction.is_filter
-    )
-    everything = gates + details
+    by_purpose = _verdicts(c, purposes, gate_findings(c), rules)
+    verdict = max((by_purpose[p.value] for p in purposes), key=lambda v: v.rank)
+    harmed = verdict in GOOD and any(is_to_harm_side(p, c) for p in purposes if not cloth.construction.is_filter)
     return Candidate(
         cloth=cloth,
         distance=distance,
@@ -48,26 +51,44 @@ def judge(
         by_purpose=by_purpose,
         harm_side=harmed,
         turned=turned,
-        deviations=deviations(c, rules),
-        findings=tuple(everything),
         penalty=penalty(c, purposes, rules),
-        stock=stock_lines(lots, target),
-        reason=reason(everything, c),
     )
+
+
+def describe(
+    target: Target, candidate: Candidate, lots: Sequence[Lot] = (), rules: HouseRules = HOUSE_RULES
+) -> Candidate:
+    """Add deviations, findings in sentences, the one reason and the lots to an assessed candidate."""
+    c = compare(target, candidate.cloth, candidate.turned, rules)
+    found = [*candidate.findings, *gate_findings(c), *_details(c, target.purposes or SIDE_BY_SIDE, rules)]
+    return replace(
+        candidate,
+        deviations=deviations(c, rules),
+        findings=tuple(found),
+        reason=candidate.reason or reason(found, c),
+        stock=stock_lines(lots, target),
+    )
+
+
+def _is_about_filter_cloth(c: Comparison) -> bool:
+    return c.target.reading.is_filter or c.made.is_filter
 
 
 def _verdicts(
     c: Comparison, purposes: tuple[Purpose, ...], gates: list[Finding], rules: HouseRules
-) -> tuple[dict[str, Verdict], list[Finding]]:
-    """Retain and pass always, and each purpose that was named; with the findings behind them."""
+) -> dict[str, Verdict]:
+    """Retain and pass always, and each purpose that was named."""
     wanted = dict.fromkeys((*SIDE_BY_SIDE, *purposes))
-    if c.target.reading.is_filter or c.made.is_filter:
-        verdict, details = decide_filter(c, gates, rules)
-        return {p.value: verdict for p in wanted}, details
-    details = findings(c, purposes, rules)
-    if Purpose.GUARD in purposes:
-        details = guard_findings(c) + details
-    return {p.value: decide(p, c, gates, rules) for p in wanted}, details
+    if _is_about_filter_cloth(c):
+        return dict.fromkeys((p.value for p in wanted), decide_filter(c, gates, rules)[0])
+    return {p.value: decide(p, c, gates, rules) for p in wanted}
+
+
+def _details(c: Comparison, purposes: tuple[Purpose, ...], rules: HouseRules) -> list[Finding]:
+    if _is_about_filter_cloth(c):
+        return decide_filter(c, gate_findings(c), rules)[1]
+    guards = guard_findings(c) if Purpose.GUARD in purposes else []
+    return guards + findings(c, purposes, rules)
 
 
 def stock_lines(lots: Sequence[Lot], target: Target) -> tuple[StockLine, ...]:

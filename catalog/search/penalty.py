@@ -19,9 +19,7 @@ def penalty(c: Comparison, purposes: tuple[Purpose, ...], rules: HouseRules) -> 
         default=0.0,
     )
     points = c.open_points if not c.made.is_filter else None
-    return Penalty(
-        aperture, wire, 0.0 if points is None else float(abs(points) / rules.open_area_points) * 0.5
-    )
+    return Penalty(aperture, wire, 0.0 if points is None else float(abs(points) / rules.open_area_points) * 0.5)
 
 
 def _aperture_part(d: Direction, purposes: tuple[Purpose, ...]) -> float:

@@ -30,9 +30,7 @@ def point_of(target: Target) -> Point:
     if is_filter:
         rating = target.rating.um if target.rating else None
         return Point(is_filter=True, rating_um=rating, **figures)
-    return (
-        Point(open_area_pct=_open_area(target), **figures) if any(figures.values()) else _limits_point(target)
-    )
+    return Point(open_area_pct=_open_area(target), **figures) if any(figures.values()) else _limits_point(target)
 
 
 def _open_area(target: Target) -> float | None:

@@ -81,9 +81,7 @@ def worst_reach(purpose: Purpose, c: Comparison, rules: HouseRules) -> Reach:
 def is_to_harm_side(purpose: Purpose, c: Comparison) -> bool:
     """True where an aperture lies to the side that hurts by more than rounding."""
     return any(
-        d.aperture_off is not None
-        and harm(purpose, d.aperture_off)
-        and abs(d.aperture_off) > d.aperture_rounding
+        d.aperture_off is not None and harm(purpose, d.aperture_off) and abs(d.aperture_off) > d.aperture_rounding
         for d in c.directions
     )
 
