@@ -9,7 +9,7 @@ from catalog.crossref import Answer
 from catalog.errors import CrossclothError, InputError
 from catalog.report.reading_document import reading_fields
 from catalog.search.candidate import Candidate, Finding, StockLine
-from catalog.search.limits import LimitReport
+from catalog.search.limit_report import LimitReport
 from catalog.stock.lots import Lot
 from catalog.target import Target
 

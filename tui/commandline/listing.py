@@ -1,0 +1,191 @@
+"""`list`: the catalogue by figures, with what each limit removed and what falls just short."""
+
+import argparse
+import re
+from collections.abc import Iterator, Mapping, Sequence
+from typing import TYPE_CHECKING, Any
+
+from catalog.errors import InputError
+from tui.commandline.match import weave_of
+from tui.commandline.options import Setting
+from tui.exit_codes import ExitCode, one_line
+
+if TYPE_CHECKING:
+    from catalog.cloth import Cloth
+    from catalog.search.limit_report import LimitReport
+    from catalog.search.reader import Filters, Range
+    from catalog.stock.lots import Lot
+
+SORTS = ("aperture", "wire", "open-area", "mass", "id")
+UNITS = {"mm": 1.0, "um": 0.001, "µm": 0.001, "μm": 0.001, "in": 25.4, '"': 25.4, "thou": 0.0254}
+NUMBER = r"(\d*[.,]?\d+)"
+RANGE = re.compile(rf"^\s*{NUMBER}?\s*(\.\.)?\s*{NUMBER}?\s*(mm|um|µm|μm|in|\"|thou)\s*$")
+LABELS = {
+    "aperture_mm": ("aperture", "mm"),
+    "wire_mm": ("wire", "mm"),
+    "open_area_pct": ("open area", "points"),
+    "mass_kg_m2": ("mass", "kg/m²"),
+    "thickness_mm": ("thickness", "mm"),
+}
+STAINLESS = "stainless"
+
+
+def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest: Any) -> None:
+    """Declare the command."""
+    parser = commands.add_parser("list", help="the catalogue by figures", **rest)
+    parser.add_argument("--aperture", metavar="FROM..TO UNIT", help="'0.1..0.2mm', '..0.8mm', '0.25mm'")
+    parser.add_argument("--wire", metavar="FROM..TO UNIT", help="'0.35mm..', written '0.35..mm'")
+    parser.add_argument("--thickness", metavar="FROM..TO UNIT")
+    parser.add_argument("--min-open-area", type=float, metavar="PCT")
+    parser.add_argument("--max-mass", type=float, metavar="KG_M2")
+    parser.add_argument("--alloy", metavar="NAME", help="an alloy, a family ('stainless'), several with commas")
+    parser.add_argument("--weave", metavar="WEAVE")
+    parser.add_argument("--in-stock", action="store_true")
+    parser.add_argument("--sort", choices=SORTS, default="aperture")
+    parser.add_argument("--limit", type=int, metavar="N", help="how many to list (default: all)")
+    parser.set_defaults(run=run)
+
+
+def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
+    """List what lies inside the limits; where nothing does, say why and what is near."""
+    from catalog.search.limit_report import filters_of, limit_report
+    from catalog.storage.opening import open_store
+
+    limits, scope = limits_of(arguments), scope_of(arguments)
+    with open_store(setting.location) as store:
+        filters = filters_of(limits, scope)
+        total = store.count(filters)
+        cloths = store.select(filters, arguments.sort, arguments.limit)
+        report = limit_report(limits, scope, store) if limits or scope != type(scope)() else None
+        lots = store.lots([c.id for c in cloths])
+    if setting.json:
+        from catalog.report.documents import list_document
+
+        setting.write_json(list_document(total, cloths, report, lots))
+    else:
+        setting.write(list_lines(total, cloths, report, lots, setting.units))
+    return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
+
+
+def limits_of(arguments: argparse.Namespace) -> "dict[str, Range]":
+    """The limits on figures that the options state. Raises InputError."""
+    limits: dict[str, Range] = {}
+    for name in ("aperture", "wire", "thickness"):
+        text = getattr(arguments, name)
+        if text is not None:
+            limits[f"{name}_mm"] = range_of(text, name)
+    if arguments.min_open_area is not None:
+        limits["open_area_pct"] = (_sensible(arguments.min_open_area, "an open area", 100), None)
+    if arguments.max_mass is not None:
+        limits["mass_kg_m2"] = (None, _sensible(arguments.max_mass, "a mass", 1000))
+    return limits
+
+
+def _sensible(value: float, what: str, most: float) -> float:
+    if not 0 < value < most:
+        raise InputError(f"{what.capitalize()} of {value:g} can't be: state more than 0 and less than {most:g}.")
+    return value
+
+
+def range_of(text: str, name: str) -> "Range":
+    """Read '0.1..0.2mm', '..0.8mm', '0.35..mm'; one figure alone is met within 0.5 %. mm. Raises InputError."""
+    found = RANGE.match(text)
+    if not found or (found[1] is None and found[3] is None):
+        raise InputError(f"--{name} takes a range with its unit, like 0.1..0.2mm, ..0.8mm or 0.35..mm, not {text!r}.")
+    unit = UNITS[found[4]]
+    low, high = (float(part.replace(",", ".")) * unit if part else None for part in (found[1], found[3]))
+    if found[2] is None:
+        if low is None or high is not None:
+            raise InputError(f"--{name} {text!r} has two figures and no '..' between them.")
+        return (low * 0.995, low * 1.005)
+    if low is not None and high is not None and low > high:
+        raise InputError(f"--{name} {text!r} runs backwards: the smaller figure comes first.")
+    return (low, high)
+
+
+def scope_of(arguments: argparse.Namespace) -> "Filters":
+    """Alloys, weave and stock as filters. Raises InputError."""
+    from catalog.search.reader import Filters
+
+    weave = weave_of(arguments.weave)
+    return Filters(
+        alloys=alloys_of(arguments.alloy) if arguments.alloy else frozenset(),
+        weaves=frozenset([weave]) if weave else frozenset(),
+        in_stock=arguments.in_stock,
+    )
+
+
+def alloys_of(text: str) -> frozenset[str]:
+    """The ids of the alloys or families named, with commas between. Raises InputError."""
+    from catalog.reference import alloys
+
+    found: set[str] = set()
+    for name in (part.strip() for part in text.split(",") if part.strip()):
+        one = alloys.find(name)
+        family = {a.id for a in alloys.alloys() if name.lower() in (a.family, a.family.split()[-1])}
+        if one is None and not family:
+            raise InputError(f"No alloy or family is called {name!r}: 'crosscloth tables alloys' lists them.")
+        found |= family if one is None else {one.id}
+    return frozenset(found)
+
+
+def list_lines(
+    total: int,
+    cloths: "Sequence[Cloth]",
+    report: "LimitReport | None",
+    lots: "Mapping[str, Sequence[Lot]]",
+    units: str,
+) -> Iterator[str]:
+    """A line a cloth; then what the limits did."""
+    for cloth in cloths:
+        yield cloth_line(cloth, len(lots.get(cloth.id, ())), units)
+    shown = f"{len(cloths)} of {total}"
+    yield f"{shown} cloths inside the limits." if report else f"{shown} cloths."
+    if report:
+        yield from report_lines(report, bool(cloths))
+
+
+def cloth_line(cloth: "Cloth", lots: int, units: str) -> str:
+    """One cloth on one line."""
+    figures, made = cloth.figures, cloth.construction
+    if made.is_filter:
+        size = f"{float(made.warp.count_per_in):.0f} x {float(made.weft.count_per_in):.0f}/in"
+        size += f" rated {cloth.rating.um:g} µm" if cloth.rating else " no rating"
+    else:
+        size = f"w {_pair(figures.warp_aperture_mm or 0, figures.weft_aperture_mm or 0, units)}"
+        size += f"  d {_pair(float(made.warp.wire_mm), float(made.weft.wire_mm), units)}  {figures.open_area_pct:.1f} %"
+    stock = f"  {lots} lots" if lots > 1 else "  1 lot" if lots else ""
+    return f"{cloth.id:<14} {one_line(cloth.name)}  {size}{stock}" + ("  demo" if cloth.demo else "")
+
+
+def _pair(one: float, other: float, units: str) -> str:
+    values = (one,) if abs(one - other) < 1e-9 else (one, other)
+    metric = " x ".join(f"{value:.4g}" for value in values) + " mm"
+    inch = " x ".join(f"{value / 25.4:.4f}" for value in values) + " in"
+    return {"metric": metric, "inch": inch}.get(units, f"{metric} {inch}")
+
+
+def report_lines(report: "LimitReport", served: bool) -> Iterator[str]:
+    """Which limit removed how many, the near misses with their shortfall, the window that would satisfy."""
+    for removed in report.removed:
+        name = LABELS.get(removed.limit, (removed.limit, ""))[0]
+        yield f"  without the limit on {name}: {removed.removed} more"
+    if report.near:
+        yield "Just outside:" if served else "Nothing satisfies all limits. Just outside:"
+    for miss in report.near:
+        short = ", ".join(f"{LABELS[s.limit][0]} by {s.by:.3g} {LABELS[s.limit][1]}" for s in miss.short_of)
+        yield f"  {miss.cloth.id:<14} {one_line(miss.cloth.name)}: short of {short}"
+    if report.window:
+        yield from _window_line(report.window)
+
+
+def _window_line(window: Any) -> Iterator[str]:
+    low, high = window.aperture
+    if window.is_empty:
+        yield f"No square cloth can satisfy them: the wire asks an aperture of {low:.3f} mm, the limit is {high:.3f} mm."
+        return
+    aperture = f"{low:.3f} ≤ w ≤ {high:.3f} mm" if high is not None else f"w ≥ {low:.3f} mm"
+    most = window.wire[1]
+    upper = f" ≤ {window.wire_per_aperture:.4f} w" if window.wire_per_aperture else ""
+    upper += f" ≤ {most:g} mm" if most is not None else ""
+    yield f"Square cloth satisfies them where {aperture} and {window.wire[0]:g} ≤ d{upper}."
