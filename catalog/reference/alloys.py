@@ -80,7 +80,9 @@ def density_kg_m3(alloy_id: str) -> float | None:
     return known.density_kg_m3 if known else None
 
 
-PREFIX = re.compile(r"^(?:aisi|astm|type|tp|uns|din|werkst(?:off)?|wnr|en|jis|grade|alloy|ss|t|w|x(?=\d\.))+(?=\d|[a-z]\d|n0|x)")
+PREFIX = re.compile(
+    r"^(?:aisi|astm|type|tp|uns|din|werkst(?:off)?|wnr|en|jis|grade|alloy|ss|t|w|x(?=\d\.))+(?=\d|[a-z]\d|n0|x)"
+)
 SUFFIX = re.compile(r"(?:ss|sst|stainless|steel)+$")
 
 

@@ -35,9 +35,7 @@ def match_document(answer: Answer, line: int | None = None) -> Document:
         "purpose": [p.value for p in request.purposes],
         "target": target_document(answer.targets[0]),
         "targets": [target_document(target) for target in answer.targets],
-        "problems": [
-            {"code": p.code, "message": p.message, "column": p.column} for p in answer.understanding.problems
-        ],
+        "problems": [{"code": p.code, "message": p.message, "column": p.column} for p in answer.understanding.problems],
         "cautions": list(answer.cautions),
         "candidates": [candidate_document(c) for c in answer.candidates],
     }
@@ -145,13 +143,10 @@ def list_document(
         "schema": SCHEMA,
         "total": total,
         "shown": len(cloths),
-        "cloths": [
-            cloth_document(c) | {"stock": [lot_document(lot) for lot in lots.get(c.id, ())]} for c in cloths
-        ],
+        "cloths": [cloth_document(c) | {"stock": [lot_document(lot) for lot in lots.get(c.id, ())]} for c in cloths],
         "limits": [{"limit": r.limit, "removed": r.removed} for r in limits.removed] if limits else [],
         "near": [
-            {"cloth": n.cloth.id, "short_of": [{"limit": s.limit, "by": s.by} for s in n.short_of]}
-            for n in limits.near
+            {"cloth": n.cloth.id, "short_of": [{"limit": s.limit, "by": s.by} for s in n.short_of]} for n in limits.near
         ]
         if limits
         else [],

@@ -48,9 +48,8 @@ def fraction_text(value: Fraction) -> str:
 
 def _direction(prefix: str, wires: Wires, is_filter: bool) -> Iterator[Step]:
     p, d = wires.pitch_mm, wires.wire_mm
-    yield Step(
-        f"{prefix}count", "25.4 / p", f"127/5 ÷ {fraction_text(p)}", f"{float(wires.count_per_in):.5g} per inch", DEFINITION
-    )
+    count = f"{float(wires.count_per_in):.5g} per inch"
+    yield Step(f"{prefix}count", "25.4 / p", f"127/5 ÷ {fraction_text(p)}", count, DEFINITION)
     if is_filter:
         return
     w = wires.aperture_mm

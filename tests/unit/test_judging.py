@@ -175,7 +175,9 @@ def test_rectangular_cloth_is_judged_on_its_worse_direction_unless_spheres_meet_
 def test_filter_cloth_is_compared_with_filter_cloth_only() -> None:
     warp = Side(pitch=Length(INCH / 24), wire=Length(F("0.36"), F("0.005"), "0.36"), by_count=True)
     weft = Side(pitch=Length(INCH / 110), wire=Length(F("0.26"), F("0.005"), "0.26"), by_count=True)
-    asked = Reading("Dutch", weave=Weave.PLAIN_DUTCH, warp=warp, weft=weft, rating=Rating(120, "absolute", "glass bead"))
+    asked = Reading(
+        "Dutch", weave=Weave.PLAIN_DUTCH, warp=warp, weft=weft, rating=Rating(120, "absolute", "glass bead")
+    )
     made = Construction(Weave.PLAIN_DUTCH, Wires(INCH / 24, F("0.36")), Wires(INCH / 110, F("0.26")), "316L")
     there = Cloth("d", "24 x 110", made, figures(made, 8000.0), "24 x 110", "inch", "test")
     rated = replace(there, rating=Rating(120, "absolute", "glass bead"))

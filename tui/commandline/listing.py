@@ -182,7 +182,7 @@ def report_lines(report: "LimitReport", served: bool) -> Iterator[str]:
 def _window_line(window: Any) -> Iterator[str]:
     low, high = window.aperture
     if window.is_empty:
-        yield f"No square cloth can satisfy them: the wire asks an aperture of {low:.3f} mm, the limit is {high:.3f} mm."
+        yield f"No square cloth satisfies them: the wire asks an aperture of {low:.3f} mm, the limit is {high:.3f} mm."
         return
     aperture = f"{low:.3f} ≤ w ≤ {high:.3f} mm" if high is not None else f"w ≥ {low:.3f} mm"
     most = window.wire[1]

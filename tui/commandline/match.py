@@ -95,8 +95,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
         return _many(arguments, setting)
     if arguments.callout is None:
         raise InputError("Nothing to match: give a callout, as in: crosscloth match '0,25/0,16 1.4404 plain'.")
-    from catalog.crossref import match, readings_to_match
     from catalog import callout
+    from catalog.crossref import match, readings_to_match
 
     request = request_of(arguments.callout, arguments)
     readings_to_match(callout.read(request.text))  # what can't be read needs no store
@@ -127,9 +127,7 @@ def _many(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     return ExitCode.DONE
 
 
-def _one_of_many(
-    number: int, text: str, arguments: argparse.Namespace, setting: Setting, store: "Reader"
-) -> None:
+def _one_of_many(number: int, text: str, arguments: argparse.Namespace, setting: Setting, store: "Reader") -> None:
     from catalog.crossref import match
     from catalog.report.documents import error_document, match_document
 

@@ -28,7 +28,8 @@ def match_lines(answer: Answer, units: str, has_demo: bool) -> Iterator[str]:
         yield ""
         yield f"Not equivalent, nearest first ({len(rest)}):"
         for candidate in rest:
-            yield from _wrapped(f"{candidate_name(candidate)}: {candidate.reason}", f"  {verdict_sign(candidate.verdict)} ", "    ")
+            sign = verdict_sign(candidate.verdict)
+            yield from _wrapped(f"{candidate_name(candidate)}: {candidate.reason}", f"  {sign} ", "    ")
     if not answer.candidates:
         yield ""
         yield "Nothing in this catalogue lies within these limits: widen them, or match without --in-stock."
@@ -48,7 +49,8 @@ def _head(answer: Answer, units: str) -> Iterator[str]:
             yield from _wrapped(f"note: {one_line(note)}", " " * 10, " " * 12)
     first = answer.targets[0]
     if first.tolerance:
-        yield from _wrapped(f"±{first.tolerance.warp_mm * 1000:.1f} µm on the aperture; {first.tolerance.source}", "Tolerance ", " " * 10)
+        text = f"±{first.tolerance.warp_mm * 1000:.1f} µm on the aperture; {first.tolerance.source}"
+        yield from _wrapped(text, "Tolerance ", " " * 10)
     purposes = ", ".join(p.value for p in first.purposes)
     yield f"Purpose   {purposes or 'none named: retain and pass side by side, the worse counts'}"
     for problem in answer.understanding.problems:
@@ -64,7 +66,8 @@ def _head(answer: Answer, units: str) -> Iterator[str]:
 def _asked(target: Target) -> Iterator[str]:
     if target.weave:
         yield f"{target.weave.words} weave" + (" (assumed)" if target.origin.get("weave") == "assumed" else "")
-    rule = {"same": "", "any": " (any alloy will do)"}.get(target.alloy_rule, f" ({target.alloy_rule} asked for instead)")
+    instead = f" ({target.alloy_rule} asked for instead)"
+    rule = {"same": "", "any": " (any alloy will do)"}.get(target.alloy_rule, instead)
     yield f"alloy {one_line(target.reading.alloy or 'not stated')}{rule}"
     if target.reading.finish:
         yield one_line(target.reading.finish)

@@ -77,8 +77,8 @@ def describe(reading: Reading, units: str) -> str:
     sides = (reading.warp, reading.weft)
     if _alike(*sides):
         return _side(sides[0], units)
-    parts = [f"{name} {text}" for name, side in (("warp", sides[0]), ("weft", sides[1])) if (text := _side(side, units))]
-    return "; ".join(parts)
+    said = ((name, _side(side, units)) for name, side in zip(("warp", "weft"), sides, strict=True))
+    return "; ".join(f"{name} {text}" for name, text in said if text)
 
 
 def _alike(one: Side, other: Side) -> bool:

@@ -42,7 +42,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     setting.write(sheet_lines(cloth, setting.units))
     setting.write(_drawing(cloth, setting.ascii))
     for step in steps:
-        setting.write(["", f"{step.quantity}: {step.formula}", f"  {step.sum}", f"  = {step.result}   [{step.source}]"])
+        source = f"   [{step.source}]" if step.source else ""
+        setting.write(["", f"{step.quantity}: {step.formula}", f"  {step.sum}", f"  = {step.result}{source}"])
     setting.write(_lot_lines(lots))
     return ExitCode.DONE
 
@@ -87,7 +88,8 @@ def sheet_lines(cloth: "Cloth", units: str) -> Iterator[str]:
     if figures.porosity is not None:
         yield f"porosity    {figures.porosity:.3f} (at thickness D + 2d)"
     yield from _filter_lines(cloth)
-    yield f"alloy       {one_line(made.alloy or 'not on record')}" + (f", {one_line(made.finish)}" if made.finish else "")
+    finish = f", {one_line(made.finish)}" if made.finish else ""
+    yield f"alloy       {one_line(made.alloy or 'not on record')}{finish}"
     yield f"source      {one_line(cloth.source)}"
     yield f"in a line   {sentence(made, figures.mass_kg_m2)}"
 

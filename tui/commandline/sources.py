@@ -26,7 +26,7 @@ def callouts_from(name: str, column: str | None) -> Iterator[tuple[int, str]]:
 
 def _lines(name: str) -> Iterator[tuple[int, str]]:
     try:
-        stream = sys.stdin.buffer if name == "-" else Path(name).open("rb")
+        stream = sys.stdin.buffer if name == "-" else Path(name).open("rb")  # noqa: SIM115, closed by the with below
     except OSError as error:
         raise InputError(f"{name} can't be read: {(error.strerror or str(error)).lower()}.") from None
     with stream:
