@@ -107,21 +107,24 @@ class CrossclothApp(App[None]):
         self.desk.door.close()
 
 
-def run(
+def browse(
     location: str,
     *,
     ascii_only: bool = False,
-    units: str = "",
+    units: str = "both",
     mouse: bool = True,
     directory: Path | None = None,
-    keys: Mapping[str, str] | None = None,
 ) -> int:
     """Run the browser on the store at *location*; the exit status comes back.
 
-    *units*: 'both', 'inch', 'metric', or '' for what was used last. *directory* holds what is remembered.
-    *keys*: command id to keys of the user's own, with commas.
+    *units* 'inch' or 'metric' are kept to; 'both' leaves it to what was used last. *directory* holds what is
+    remembered and the user's own keys; without it that is the user's state directory.
     """
+    from tui.memory import own_keys
+    from tui.places import state_directory
     from tui.terminal import forgiving_driver
+
+    kept = directory or state_directory()
 
     def opener() -> OpenStore:
         from catalog.storage.opening import open_store
@@ -131,10 +134,10 @@ def run(
     gc.disable()  # until the first frame: collecting while importing costs a tenth of the start
     app = CrossclothApp(
         opener,
-        units=units,
+        units="" if units == "both" else units,
         ascii_only=ascii_only,
-        directory=directory,
-        keys=keys,
+        directory=kept,
+        keys=own_keys(kept),
         driver_class=forgiving_driver(),
     )
     app.run(mouse=mouse)

@@ -6,6 +6,7 @@ from pathlib import Path
 from typing import Any
 
 NAME = "browser.json"
+KEYS = "keys.json"
 
 
 @dataclass(slots=True)
@@ -54,3 +55,21 @@ class Memory:
             part.replace(directory / NAME)
         except OSError:
             return
+
+
+def own_keys(directory: Path | None) -> dict[str, str]:
+    """The user's own keys: a file keys.json with command ids and keys, as {"purpose": "f7,P"}.
+
+    What can't be read, and commands that don't exist, count for nothing.
+    """
+    from tui.commands import COMMANDS
+
+    if directory is None:
+        return {}
+    try:
+        kept = json.loads((directory / KEYS).read_text("utf-8"))
+    except (OSError, ValueError):
+        return {}
+    known = {command.id for command in COMMANDS}
+    pairs = kept.items() if isinstance(kept, dict) else ()
+    return {name: keys for name, keys in pairs if name in known and isinstance(keys, str) and keys.strip()}

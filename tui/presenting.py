@@ -16,6 +16,7 @@ LONGEST = 400
 INCH_DECIMALS = 5
 FINE_INCH = 0.001
 MARKS_KEPT = 2
+VARIATIONS = frozenset(map(chr, (*range(0xFE00, 0xFE10), *range(0xE0100, 0xE01F0))))
 UNITS = ("both", "inch", "metric")
 
 PLAIN: Mapping[int, str] = str.maketrans(
@@ -50,7 +51,7 @@ def _few_marks(text: str) -> str:
         run = run + 1 if is_mark else 0
         if unicodedata.category(char) in ("Cc", "Cf", "Co", "Cs", "Zl", "Zp"):
             kept.append(" ")
-        elif run <= MARKS_KEPT and not (is_mark and not kept):
+        elif run <= MARKS_KEPT and not (is_mark and (not kept or char in VARIATIONS)):
             kept.append(char)
     return "".join(kept)
 
@@ -120,6 +121,18 @@ def wrapped(text: str, width: int, indent: int = 0) -> list[str]:
             current = f"{current} {word}" if current else (" " * indent if lines else "") + word
     if current.strip():
         lines.append(current)
+    return lines or [""]
+
+
+def phrases(words: Sequence[str], between: str, width: int) -> list[str]:
+    """Short phrases in lines of at most *width* cells, none of them broken."""
+    lines: list[str] = []
+    for word in words:
+        joined = f"{lines[-1]}{between}{word}" if lines else word
+        if lines and width_of(joined) <= width:
+            lines[-1] = joined
+        else:
+            lines.append(word)
     return lines or [""]
 
 

@@ -83,11 +83,6 @@ class CataloguePlace(Place):
         rows = self.table.rows
         return rows.cloth(self.table.cursor) if isinstance(rows, StorePages) and rows.total else None
 
-    @property
-    def is_opened(self) -> bool:
-        """True where one cloth has the whole place."""
-        return self.has_class("-opened")
-
     def filters(self) -> "Filters":
         """The limits as the store understands them."""
         from catalog.construction import Weave
@@ -129,7 +124,7 @@ class CataloguePlace(Place):
         from tui.widgets.cloth_lines import cloth_cells, cloth_columns
 
         self.total = total
-        columns = cloth_columns(self.desk.units)
+        columns = self.chosen(cloth_columns(self.desk.units))
         if not total:
             self.table.show(columns, self.table.rows)
             self.say_in_list(
@@ -170,15 +165,14 @@ class CataloguePlace(Place):
     def on_paged_table_chosen(self, event: PagedTable.Chosen) -> None:
         """The cloth gets the whole place."""
         event.stop()
-        self.add_class("-opened")
+        self.open_up()
         self._redraw()
 
     def leave_inner(self) -> bool:
         """Back to the list."""
         if not self.is_opened:
             return False
-        self.remove_class("-opened")
-        self.table.focus()
+        self.close_up()
         self._redraw()
         return True
 

@@ -9,7 +9,7 @@ from textual.containers import Container, Horizontal
 from textual.widgets import Input
 
 from tui.commands import MATCH
-from tui.presenting import SEALS, Line, fit, harmless, plain, significant
+from tui.presenting import SEALS, Line, fit, harmless, phrases, plain, significant
 from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.callout_input import LineInput
@@ -21,12 +21,14 @@ if TYPE_CHECKING:
     from catalog.callout.reading import Understanding
     from catalog.crossref import Answer, Request
     from catalog.search.candidate import Candidate
+    from tui.widgets.plot import Aim, Spot
 
 PURPOSES: tuple[tuple[str, ...], ...] = (
     (), ("retain",), ("pass",), ("size",), ("flow",), ("strength",), ("guard",), ("retain", "flow"),
 )  # fmt: skip
 TOLERANCES = ("", "1", "2", "3", "5", "10", "e11", "iso3310")
 MOST_MARKED = 4
+SPOTS = 600
 
 
 class MatchPlace(Place):
@@ -44,7 +46,9 @@ class MatchPlace(Place):
         self.view = "figures"
         self.least_open_area: float | None = None
         self.marked: list[str] = []
-        self.closed_by: str | None = None
+        self.special = ""
+        self.spots: Sequence[Spot] = ()
+        self.spot: Spot | None = None
         self._asked = False
 
     def compose(self) -> ComposeResult:
@@ -79,11 +83,6 @@ class MatchPlace(Place):
         if self.answer is None or not self.table.rows.total:
             return None
         return self.answer.candidates[self.table.cursor]
-
-    @property
-    def is_opened(self) -> bool:
-        """True where one candidate has the whole place."""
-        return self.has_class("-opened")
 
     def settle(self) -> None:
         """To the line, where there is nothing in the list yet."""
@@ -209,7 +208,7 @@ class MatchPlace(Place):
         ids = [c.cloth.id for c in self.answer.candidates]
         cursor = ids.index(highlighted) if highlighted in ids else 0
         rows = CandidateRows(self.answer.candidates, self.desk.ascii_only)
-        columns = candidate_columns(self.desk.units, self.table.size.width or 80)
+        columns = self.chosen(candidate_columns(self.desk.units, self.table.size.width or 80))
         rows.columns = columns
         self.table.marked = frozenset(i for i, cid in enumerate(ids) if cid in self.marked)
         self.table.show(columns, rows, cursor)
@@ -221,7 +220,9 @@ class MatchPlace(Place):
     def _nothing(self, *lines: tuple[str, str], keep_answer: bool = False) -> None:
         if not keep_answer:
             self.answer = None
-        self.remove_class("-opened")
+        self.special = ""
+        if self.is_opened:
+            self.close_up()
         self.say_in_list(*lines)
         self._redraw()
 
@@ -238,16 +239,21 @@ class MatchPlace(Place):
     def on_paged_table_chosen(self, event: PagedTable.Chosen) -> None:
         """One candidate gets the whole place."""
         event.stop()
-        self.add_class("-opened")
+        self._open("")
+
+    def _open(self, special: str) -> None:
+        """Give the whole place to one candidate, the comparison or the plot."""
+        self.special = special
+        self.open_up()
         self.detail.show(self._detail_lines)
+        self.call_after_refresh(self.detail.show, self._detail_lines)
 
     def leave_inner(self) -> bool:
         """Back to the list."""
         if not self.is_opened:
             return False
-        self.remove_class("-opened")
-        self.closed_by = None
-        self.table.focus()
+        self.special = ""
+        self.close_up()
         self.detail.show(self._detail_lines)
         return True
 
@@ -268,9 +274,7 @@ class MatchPlace(Place):
             return [((" ", "text"),)]
         # the line to type in begins behind its label
         label = 9
-        lines = reading_lines(
-            self.understanding, width, self.desk.units, self.input.text_offset - label, self.taken
-        )
+        lines = reading_lines(self.understanding, width, self.desk.units, self.input.text_offset - label, self.taken)
         if self.answer is not None:
             lines += [((fit(f"! {harmless(said)}", width), "warn"),) for said in self.answer.cautions]
         return self.spelled_lines(lines)
@@ -284,9 +288,9 @@ class MatchPlace(Place):
         if self.least_open_area is not None:
             said.append(f"open ≥ {significant(self.least_open_area)} %")
         right = self._count_words()
-        text = " " + " · ".join(x for x in said if x)
-        left = fit(self.spelled(text), max(0, width - len(right) - 2))
-        return self.spelled_lines([((left + " ", "muted"), (right, "muted"))])
+        parts = phrases([self.spelled(x) for x in said], self.spelled(" · "), width - len(right) - 2)
+        first = fit(" " + parts[0], width - len(right) - 1) + right
+        return self.spelled_lines([((first, "muted"),), *(((f" {part}", "muted"),) for part in parts[1:2])])
 
     def _tolerance_words(self) -> str:
         target = self.answer.targets[0] if self.answer and self.answer.targets else None
@@ -299,16 +303,16 @@ class MatchPlace(Place):
         if self.answer is None or not self.answer.candidates:
             return ""
         served = sum(1 for c in self.answer.candidates if SEALS[c.verdict].ink in ("good", "near", "risk"))
-        return f"{served} of {len(self.answer.candidates)} within limits" if served else "none within limits"
+        return f"{served} of {len(self.answer.candidates)} fit" if served else "none fits"
 
     def _detail_lines(self, width: int) -> Sequence[Line]:
         from tui.widgets.detail_lines import view_lines, whole_lines
 
-        if self.closed_by is not None:
-            return self.spelled_lines(self._special_lines(width))
         candidate, answer = self.candidate, self.answer
         if candidate is None or answer is None:
             return []
+        if self.special:
+            return self.spelled_lines(self._special_lines(answer, width))
         height = max(8, self.detail.size.height)
         units, ascii_only = self.desk.units, self.desk.ascii_only
         if self.is_opened or self.screen.has_class("-wide"):
@@ -317,16 +321,80 @@ class MatchPlace(Place):
             lines = view_lines(self.view, answer, candidate, width, height, units, ascii_only)
         return self.spelled_lines(lines)
 
-    def _special_lines(self, width: int) -> Sequence[Line]:
-        return []
+    def _special_lines(self, answer: "Answer", width: int) -> Sequence[Line]:
+        """The comparison or the plot, where one is open."""
+        if self.special == "compare":
+            from tui.widgets.compare_lines import compare_lines
+
+            chosen = [c for c in answer.candidates if c.cloth.id in self.marked]
+            return compare_lines(answer, chosen, width, self.desk.units, self.desk.ascii_only)
+        from tui.widgets.plot import plot_lines
+
+        aim = self._aim(answer)
+        if aim is None:
+            return [(("No aperture was asked, so there is nothing to plot against.", "muted"),)]
+        return plot_lines(aim, self.spots, self.spot, width, self.detail.size.height, self.desk.ascii_only)
+
+    def _aim(self, answer: "Answer") -> "Aim | None":
+        from tui.widgets.plot import Aim
+
+        target = answer.targets[0]
+        if target.warp.aperture is None or target.reading.is_filter:
+            return None
+        tolerance = target.tolerance.warp_mm if target.tolerance else 0.0
+        return Aim(float(target.warp.aperture.mm), target.reading.open_area_pct, tolerance)
 
     def action_row_down(self) -> None:
-        """Next row, or further down in what is open."""
-        self._scroll(1) if self.is_opened else super().action_row_down()
+        """Next row, further down in what is open, or down in the plot."""
+        if self.special == "plot":
+            self._move_spot(0, -1)
+        else:
+            self._scroll(1) if self.is_opened else super().action_row_down()
 
     def action_row_up(self) -> None:
-        """Row before, or further up in what is open."""
-        self._scroll(-1) if self.is_opened else super().action_row_up()
+        """Row before, further up in what is open, or up in the plot."""
+        if self.special == "plot":
+            self._move_spot(0, 1)
+        else:
+            self._scroll(-1) if self.is_opened else super().action_row_up()
+
+    def action_columns_right(self) -> None:
+        """Columns further right, or right in the plot."""
+        self._move_spot(1, 0) if self.special == "plot" else super().action_columns_right()
+
+    def action_columns_left(self) -> None:
+        """Columns further left, or left in the plot."""
+        self._move_spot(-1, 0) if self.special == "plot" else super().action_columns_left()
+
+    def action_open(self) -> None:
+        """Open the highlighted one, or take the plot's spot."""
+        if self.special == "plot":
+            self._take_spot()
+        elif not self.is_opened:
+            super().action_open()
+
+    def _move_spot(self, across: int, up: int) -> None:
+        from tui.widgets.plot import FOOT, LEFT, frame_of, next_spot
+
+        aim = self._aim(self.answer) if self.answer else None
+        if aim is None:
+            return
+        size = self.detail.size
+        frame = frame_of(aim, self.spots, size.width - LEFT - 1, size.height - FOOT - 1)
+        self.spot = next_spot(self.spots, frame, self.spot, across, up)
+        self.detail.show(self._detail_lines)
+
+    def _take_spot(self) -> None:
+        """Back to the list, on the cloth that was picked."""
+        names = [c.cloth.name for c in self.answer.candidates] if self.answer else []
+        if self.spot is None:
+            return
+        if self.spot.name not in names:
+            self.desk.say(f"{self.spot.name} lies beyond this list: F3, the catalogue, has it.")
+            return
+        row = names.index(self.spot.name)
+        self.leave_inner()
+        self.table.move_to(row)
 
     def action_page_down(self) -> None:
         """A page down."""
@@ -416,6 +484,42 @@ class MatchPlace(Place):
         self.table.mark(frozenset(i for i, cid in enumerate(ids) if cid in self.marked))
         self.table.move(1)
 
+    def action_compare(self) -> None:
+        """The marked ones side by side."""
+        shown = {c.cloth.id for c in self.answer.candidates} if self.answer else set()
+        if len(shown.intersection(self.marked)) < 2:
+            self.desk.say("Mark two to four cloths first, with Space.")
+            return
+        self._open("compare")
+
+    def action_plot(self) -> None:
+        """Aperture against open area."""
+        if self.answer is None or not self.answer.candidates:
+            self.desk.say("There is nothing to plot yet.")
+            return
+        self.spots = self._lettered()
+        self.spot = None
+        self._open("plot")
+        if (aim := self._aim(self.answer)) is not None:
+            work = _nearest_spots(aim.aperture_mm, aim.open_area_pct, {s.name for s in self.spots})
+            self.desk.door.ask("plot", work, self._got_spots, self.desk.say)
+
+    def _lettered(self) -> "list[Spot]":
+        from tui.widgets.plot import LETTERS, Spot
+
+        spots = []
+        for number, each in enumerate(self.answer.candidates if self.answer else ()):
+            figures = each.cloth.figures
+            if figures.warp_aperture_mm and figures.open_area_pct is not None:
+                letter = LETTERS[number] if number < len(LETTERS) else ""
+                ink = SEALS[each.verdict].ink
+                spots.append(Spot(figures.warp_aperture_mm, figures.open_area_pct, each.cloth.name, letter, ink))
+        return spots
+
+    def _got_spots(self, found: "list[Spot]") -> None:
+        self.spots = [*self._lettered(), *found]
+        self.detail.show(self._detail_lines)
+
     async def action_lots(self) -> None:
         """To the lots of the highlighted cloth."""
         if self.candidate is not None:
@@ -443,3 +547,20 @@ class MatchPlace(Place):
                 whole_lines(self.answer, self.candidate, 100, 26, self.desk.units, self.desk.ascii_only)
             ).splitlines()
         return lines
+
+
+def _nearest_spots(aperture_mm: float, open_area_pct: float | None, but: set[str]) -> Callable[[Any], "list[Spot]"]:
+    """A question for the nearest cloths of the catalogue as spots, without those named."""
+
+    def work(store: Any) -> "list[Spot]":
+        from catalog.search.reader import Point
+        from tui.widgets.plot import Spot
+
+        point = Point(warp_aperture_mm=aperture_mm, weft_aperture_mm=aperture_mm, open_area_pct=open_area_pct)
+        return [
+            Spot(cloth.figures.warp_aperture_mm, cloth.figures.open_area_pct, cloth.name)
+            for cloth, _, _ in store.nearest(point, SPOTS)
+            if cloth.name not in but and cloth.figures.warp_aperture_mm and cloth.figures.open_area_pct is not None
+        ]
+
+    return work

@@ -10,7 +10,8 @@ from textual.widgets import Input
 from tui.commands import LIST
 from tui.presenting import Line, plain
 from tui.screens.keys import bindings
-from tui.widgets.paged_table import PagedTable
+from tui.widgets.line_view import LineView
+from tui.widgets.paged_table import Column, PagedTable
 
 if TYPE_CHECKING:
     from tui.screens.desk import Desk
@@ -58,6 +59,24 @@ class Place(Vertical):
         """The store can't be opened, and why."""
         self.say_in_list((f"! {sentence}", "bad"), ("Press r to try again; what you typed stays.", "muted"))
 
+    @property
+    def is_opened(self) -> bool:
+        """True where one thing has the whole place."""
+        return self.has_class("-opened")
+
+    def open_up(self) -> None:
+        """Give the whole place to the detail; the keys go there, as the list is hidden."""
+        detail = self.query_one("#detail", LineView)
+        detail.can_focus = True
+        self.add_class("-opened")
+        detail.focus()
+
+    def close_up(self) -> None:
+        """Back to the list."""
+        self.query_one("#detail", LineView).can_focus = False
+        self.remove_class("-opened")
+        self.table.focus()
+
     def look_changed(self) -> None:
         """Units or theme have changed."""
         self.table.forget()
@@ -81,9 +100,7 @@ class Place(Vertical):
         from tui.widgets.paged_table import NoRows
 
         width = max(20, (self.table.size.width or 80) - 2)
-        said: list[Line] = [
-            ((f" {part}", ink),) for text, ink in lines for part in wrapped(harmless(text), width)
-        ]
+        said: list[Line] = [((f" {part}", ink),) for text, ink in lines for part in wrapped(harmless(text), width)]
         self.table.empty = said
         self.table.show(self.table.columns, NoRows())
 
@@ -132,6 +149,31 @@ class Place(Vertical):
     def action_open(self) -> None:
         """Open the highlighted row."""
         self.table.choose()
+
+    def chosen(self, columns: Sequence[Column]) -> tuple[Column, ...]:
+        """Of a list's columns those that the user chose, in that order, behind the fixed ones."""
+        own = self.desk.memory.columns.get(self.where)
+        if not own:
+            return tuple(columns)
+        moving = {c.key: c for c in columns if not c.fixed}
+        return (*(c for c in columns if c.fixed), *(moving[key] for key in own if key in moving))
+
+    def action_columns(self) -> None:
+        """Choose the columns by name."""
+        shown = " ".join(c.key for c in self.table.columns if not c.fixed)
+        self.desk.ask_line("Columns (empty: all)", shown, self._choose_columns)
+
+    def _choose_columns(self, text: str) -> None:
+        self.desk.memory.columns.pop(self.where, None)
+        self.look_changed()
+        known = [c.key for c in self.table.columns if not c.fixed]
+        wanted = [word for word in text.replace(",", " ").split() if word in known]
+        unknown = [word for word in text.replace(",", " ").split() if word not in known]
+        if wanted:
+            self.desk.memory.columns[self.where] = wanted
+            self.look_changed()
+        if unknown:
+            self.desk.say(f"No column is called {unknown[0]}: they are {' '.join(known)}.")
 
     def action_find(self) -> None:
         """Find a row by a word in it."""

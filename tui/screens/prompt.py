@@ -33,7 +33,9 @@ class Prompt(ModalScreen[str | None]):
 
     def on_mount(self) -> None:
         """Type at once."""
-        self.query_one(LineInput).focus()
+        line = self.query_one(LineInput)
+        line.focus()
+        line.select_all()
 
     def on_input_submitted(self, event: Input.Submitted) -> None:
         """Done."""

@@ -1,6 +1,6 @@
 """Stock: the lots by location; a word narrows them; a cloth may be carried along from another place."""
 
-from collections.abc import Sequence
+from collections.abc import Mapping, Sequence
 from typing import TYPE_CHECKING, Any, ClassVar
 
 from textual.app import ComposeResult
@@ -44,28 +44,33 @@ def lot_columns(units: str) -> tuple[Column, ...]:
 class LotRows:
     """Lots with their cloths as rows."""
 
-    def __init__(self, lots: "Sequence[tuple[Lot, Cloth]]", units: str) -> None:
+    def __init__(self, lots: "Sequence[tuple[Lot, Cloth]]", units: str, columns: Sequence[Column]) -> None:
         self.lots, self._inch = lots, units == "inch"
+        self._columns = columns
         self.total = len(lots)
 
     def cells(self, row: int) -> Sequence[str | Piece]:
         """A row's cells."""
+        cells = self._all_cells(row)
+        return [cells[column.key] for column in self._columns]
+
+    def _all_cells(self, row: int) -> Mapping[str, str | Piece]:
         lot, cloth = self.lots[row]
         per_width, per_length = (25.4, 304.8) if self._inch else (1.0, 1000.0)
         width = lot.usable_width_mm / per_width
-        return (
-            harmless(lot.location, 20),
-            harmless(cloth.name, 60),
-            ("D", "warn") if lot.demo else "",
-            f"{width:.1f}" if self._inch else f"{width:.0f}",
-            f"{lot.free_length_mm / per_length:.2f}",
-            significant(lot.available_m2, 3),
-            harmless(lot.form, 10),
-            f"{lot.reserved_mm / per_length:.2f}" if lot.reserved_mm else "",
-            harmless(lot.heat or "–", 20),
-            harmless(lot.certificate or "–", 6),
-            harmless(lot.id, 20),
-        )
+        return {
+            "location": harmless(lot.location, 20),
+            "name": harmless(cloth.name, 60),
+            "demo": ("D", "warn") if lot.demo else "",
+            "width": f"{width:.1f}" if self._inch else f"{width:.0f}",
+            "length": f"{lot.free_length_mm / per_length:.2f}",
+            "area": significant(lot.available_m2, 3),
+            "form": harmless(lot.form, 10),
+            "held": f"{lot.reserved_mm / per_length:.2f}" if lot.reserved_mm else "",
+            "heat": harmless(lot.heat or "–", 20),
+            "cert": harmless(lot.certificate or "–", 6),
+            "lot": harmless(lot.id, 20),
+        }
 
 
 class StockPlace(Place):
@@ -131,7 +136,8 @@ class StockPlace(Place):
         shown = self._sorted(self._passing(self.lots))
         self.table.sorted_by = {"cloth": "name"}.get(self.sort, self.sort)
         if shown:
-            self.table.show(lot_columns(self.desk.units), LotRows(shown, self.desk.units), self.table.cursor)
+            columns = self.chosen(lot_columns(self.desk.units))
+            self.table.show(columns, LotRows(shown, self.desk.units, columns), self.table.cursor)
         elif self.only is not None and not self.query_one("#words", LineInput).value:
             self.say_in_list(
                 (f"Nothing of {self.only.name} lies on the rack.", "risk"),

@@ -101,8 +101,8 @@ class TablesPlace(Place):
         rows = self._passing(with_inches(table.rows))
         keys = list(dict.fromkeys(key for row in rows[:MEASURED_ROWS] for key in row))
         if rows:
-            columns = [_column(key, rows, index == 0) for index, key in enumerate(keys)]
-            self.table.show(columns, TableRows(rows, keys))
+            columns = self.chosen([_column(key, rows, index == 0) for index, key in enumerate(keys)])
+            self.table.show(columns, TableRows(rows, [column.key for column in columns]))
         else:
             what_next = "Change the line above; t shows the next table."
             self.say_in_list(("No row holds these words.", "risk"), (what_next, "muted"))
@@ -128,8 +128,8 @@ class TablesPlace(Place):
         self.table.focus()
 
     def look_changed(self) -> None:
-        """Other colours."""
-        self.table.forget()
+        """Other colours or columns."""
+        self._list()
 
     def _which_line(self, width: int) -> Sequence[Line]:
         pieces: list[Piece] = [(" ", "text")]

@@ -107,7 +107,7 @@ def figure_lines(answer: "Answer", candidate: Candidate, width: int, units: str)
     """Asked and offered, figure by figure, with the difference and its limit."""
     label, differs = 10, 8
     column = max(10, (width - label - differs - 2) // 2)
-    heads = "  mm / in" if units == "both" and column < ROOM_FOR_UNITS else ""
+    heads = " mm/in" if units == "both" and column < ROOM_FOR_UNITS else ""
     lines: Lines = [
         (
             (fit("", label) + fit("asked" + heads, column) + " " + fit("offered" + heads, column) + " ", "head"),
@@ -191,13 +191,9 @@ def _count(value: float | None, units: str, column: int) -> str:
 def _cloth_rows(candidate: Candidate, target: Target, units: str, column: int) -> list[Row]:
     rows: list[Row] = []
     if open_area := candidate.deviation("open_area"):
-        rows.append(
-            ("open area", _pct(open_area.asked), _pct(open_area.found), *_off(open_area, unit="pt"))
-        )
+        rows.append(("open area", _pct(open_area.asked), _pct(open_area.found), *_off(open_area, unit="pt")))
     if weight := candidate.deviation("mass"):
-        rows.append(
-            ("mass", _mass(weight.asked, units, column), _mass(weight.found, units, column), *_off(weight))
-        )
+        rows.append(("mass", _mass(weight.asked, units, column), _mass(weight.found, units, column), *_off(weight)))
     section = candidate.deviation("section")
     if section and section.found is not None:
         rows.append(("section", "100 %", _pct(section.found), *_off(section)))
@@ -323,9 +319,7 @@ def view_lines(
     return summary_lines(answer, candidate, width, units, ascii_only)
 
 
-def whole_lines(
-    answer: "Answer", candidate: Candidate, width: int, height: int, units: str, ascii_only: bool
-) -> Lines:
+def whole_lines(answer: "Answer", candidate: Candidate, width: int, height: int, units: str, ascii_only: bool) -> Lines:
     """Everything about a candidate, one part under the other."""
     blank: Line = ()
     parts = [heading(candidate, ascii_only), *purpose_line(candidate, ascii_only), blank]

@@ -12,7 +12,7 @@ DARK: Mapping[str, str] = {
     "paper": "#14181c", "panel": "#20272d", "text": "#dfe4e6", "muted": "#9aa7ad", "head": "#8fb8c8",
     "strong": "#ffffff", "good": "#8fce9a", "near": "#a9c78a", "risk": "#e8bd6a", "ask": "#b9b1e6",
     "bad": "#f0938b", "count": "#8ec7e8", "wire": "#e6b57a", "aperture": "#8fd6c0", "alloy": "#cdaee0",
-    "weave": "#d9d08a", "form": "#a8b8e8", "limit": "#e8a7c0", "other": "#c2cdd2", "cursor": "#2f4a57",
+    "weave": "#d9d08a", "form": "#a8b8e8", "limit": "#e8a7c0", "other": "#c2cdd2", "cursor": "#263c47",
     "line": "#4a565d", "warn": "#f2c879",
 }  # fmt: skip
 LIGHT: Mapping[str, str] = {

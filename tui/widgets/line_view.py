@@ -14,7 +14,7 @@ from tui.widgets.inks import strip_of, styles, text_of
 Composer = Callable[[int], Sequence[Line]]
 
 
-class Inked(ScrollView):
+class Inked(ScrollView, inherit_bindings=False):
     """A scroll view that draws with the theme's inks."""
 
     @property
@@ -23,7 +23,7 @@ class Inked(ScrollView):
         return styles(self.app.current_theme.dark, self.app.no_color)
 
 
-class LineView(Inked, can_focus=False):
+class LineView(Inked, can_focus=False, inherit_bindings=False):
     """Shows what a composer makes of the width; composed again when the width changes."""
 
     def __init__(self, composer: Composer | None = None, *, id: str | None = None, classes: str = "") -> None:  # noqa: A002

@@ -53,7 +53,7 @@ class NoRows:
         return None
 
 
-class PagedTable(Inked, can_focus=True):
+class PagedTable(Inked, can_focus=True, inherit_bindings=False):
     """Rows of any number; the cursor's row carries a sign as well as a colour."""
 
     cursor = reactive(0)
