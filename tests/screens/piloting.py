@@ -40,7 +40,7 @@ class Driver:
         """Wait until the store has answered."""
         for _ in range(PATIENCE):
             await self.pilot.pause()
-            if (self.desk.door.is_open or self.desk.trouble) and not self.desk.door.is_busy:
+            if self.desk.trouble or (self.desk.door.is_open and not self.desk.door.is_busy):
                 break
         await self.pilot.pause()
 

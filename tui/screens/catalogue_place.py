@@ -150,7 +150,7 @@ class CataloguePlace(Place):
         self._about_cloth()
 
     def _failed(self, sentence: str) -> None:
-        self.say_in_list((f"! {sentence}", "bad"), ("Press r to ask again.", "muted"))
+        self.say_in_list((f"! {sentence}", "bad"), ("Press F7 to ask again.", "muted"))
         self._redraw()
 
     def _redraw(self) -> None:

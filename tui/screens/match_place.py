@@ -215,7 +215,7 @@ class MatchPlace(Place):
         self._redraw()
 
     def _failed(self, sentence: str) -> None:
-        self._nothing((f"! {sentence}", "bad"), ("Change the line or the limits; r asks again.", "muted"))
+        self._nothing((f"! {sentence}", "bad"), ("Change the line or the limits; F7 asks again.", "muted"))
 
     def _nothing(self, *lines: tuple[str, str], keep_answer: bool = False) -> None:
         if not keep_answer:

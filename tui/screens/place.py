@@ -57,7 +57,7 @@ class Place(Vertical):
 
     def store_shut(self, sentence: str) -> None:
         """The store can't be opened, and why."""
-        self.say_in_list((f"! {sentence}", "bad"), ("Press r to try again; what you typed stays.", "muted"))
+        self.say_in_list((f"! {sentence}", "bad"), ("Press F7 to try again; what you typed stays.", "muted"))
 
     @property
     def is_opened(self) -> bool:

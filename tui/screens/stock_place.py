@@ -118,7 +118,7 @@ class StockPlace(Place):
         self._list()
 
     def _failed(self, sentence: str) -> None:
-        self.say_in_list((f"! {sentence}", "bad"), ("Press r to ask again.", "muted"))
+        self.say_in_list((f"! {sentence}", "bad"), ("Press F7 to ask again.", "muted"))
 
     def on_input_changed(self, event: Input.Changed) -> None:
         """Narrow the list."""

@@ -35,6 +35,7 @@ VIEWS = ("figures", "reasons", "stock", "drawing")
 SIDE_BY_SIDE_FROM = 76
 FIGURES_WIDTH = 50
 ROOM_FOR_UNITS = 22
+DRAWING_ROWS = (12, 24)
 LOT_WORDS = {"roll": "roll", "remnant": "remnant", "panel": "panel", "disc": "disc"}
 
 
@@ -324,10 +325,11 @@ def whole_lines(answer: "Answer", candidate: Candidate, width: int, height: int,
     blank: Line = ()
     parts = [heading(candidate, ascii_only), *purpose_line(candidate, ascii_only), blank]
     parts += [*figure_lines(answer, candidate, min(width, 78), units), blank]
-    parts += [(("why", "title"),), *reason_lines(answer, candidate, width), blank]
     parts += [*stock_lines(candidate, width, units), blank]
-    parts += [(("to scale", "title"),)]
-    parts += drawing_lines(answer, candidate, min(width, 110), max(14, min(26, height - 2)), ascii_only)
+    parts += [(("why", "title"),), *reason_lines(answer, candidate, width), blank]
+    left = height - len(parts) - 1
+    rows = left if DRAWING_ROWS[0] <= left <= DRAWING_ROWS[1] else DRAWING_ROWS[left > DRAWING_ROWS[1]]
+    parts += [(("to scale", "title"),), *drawing_lines(answer, candidate, min(width, 110), rows, ascii_only)]
     cloth = candidate.cloth
     said = f"{harmless(cloth.declared)}   source: {harmless(cloth.source)}   id {harmless(cloth.id)}"
     return [*parts, blank, *(((part, "muted"),) for part in wrapped(said, width))]
