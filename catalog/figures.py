@@ -2,7 +2,7 @@
 
 from catalog.cloth import Figures
 from catalog.construction import Construction, Weave
-from catalog.physics import geometry, mass
+from catalog.physics import filter_cloth, geometry, mass
 
 DERIVATION_VERSION = 1
 """Raised when a formula changes; a store with another version is recomputed."""
@@ -30,6 +30,17 @@ def figures(construction: Construction, density_kg_m3: float | None) -> Figures:
         weft_aperture_mm=apertures[1],
         open_area_pct=geometry.open_area_pct(*apertures, *pitches),
         mass_kg_m2=nominal,
-        mass_geometric_kg_m2=geometric if geometric is not None and isfinite(geometric) else None,
+        mass_geometric_kg_m2=geometric,
         thickness_mm=geometry.thickness_least_mm(*wires),
     )
+
+
+def _filter_figures(weave: Weave, pitches: list[float], wires: list[float], density_kg_m3: float | None) -> Figures:
+    thickness = filter_cloth.thickness_mm(weave.value, *wires)
+    mass_kg_m2 = porosity = sphere_um = None
+    if density_kg_m3 is not None:
+        mass_kg_m2 = filter_cloth.mass_kg_m2(weave.value, *pitches, *wires, density_kg_m3)
+        porosity = filter_cloth.porosity(mass_kg_m2, thickness, density_kg_m3)
+    if weave is Weave.PLAIN_DUTCH:
+        sphere_um = filter_cloth.sphere_plain_dutch_um(*pitches, *wires)
+    return Figures(None, None, None, mass_kg_m2, mass_kg_m2, thickness, porosity, sphere_um)

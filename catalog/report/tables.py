@@ -1,11 +1,14 @@
 """The reference tables as rows with a source: numbers are numbers, whoever prints them."""
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Iterator, Mapping
 from dataclasses import dataclass
-from typing import Any
+from typing import TYPE_CHECKING, Any
 
 from catalog.reference import alloys, gauges, safety, sieves
 from catalog.search.reader import Filters, Reader
+
+if TYPE_CHECKING:
+    from catalog.search.lookalikes import Pair
 
 Row = dict[str, Any]
 
@@ -81,6 +84,52 @@ REFERENCE: Mapping[str, Callable[[], Table]] = {
 }
 
 
-def every_cloth(reader: Reader) -> list[Any]:
-    """The whole catalogue, by aperture."""
-    return list(reader.select(Filters()))
+def equivalent_table(reader: Reader) -> Table:
+    """The catalogue inch against metric, by aperture, with differences and verdict."""
+    return Table("equivalents", "computed from this store; alloys left aside", list(equivalent_rows(reader)))
+
+
+def equivalent_rows(reader: Reader) -> Iterator[Row]:
+    """The same row by row, for whoever streams."""
+    from catalog.search.equivalents import equivalents
+
+    for pair in equivalents(reader.select(Filters())):
+        yield {
+            "inch": pair.inch.id,
+            "inch_sold_as": pair.inch.declared,
+            "metric": pair.metric.id,
+            "metric_sold_as": pair.metric.declared,
+            "aperture_mm": round(pair.inch.figures.warp_aperture_mm or 0, 5),
+            "aperture_pct": round(pair.aperture_pct, 2),
+            "wire_pct": round(pair.wire_pct, 2),
+            "open_area_points": round(pair.open_area_points, 2),
+            "verdict": pair.judged.verdict.value,
+        }
+
+
+def lookalike_table(reader: Reader) -> Table:
+    """Cloths of one spoken name whose openings lie over 5 % apart, and cloth listed twice."""
+    from catalog.search.lookalikes import listed_twice, lookalikes, spoken_count
+
+    cloths = list(reader.select(Filters()))
+    rows = [_pair_row("look-alike", str(spoken_count(p.one)), p) for p in lookalikes(cloths)]
+    rows += [_pair_row("listed twice", "", p) for p in listed_twice(cloths)]
+    return Table("lookalikes", "computed from this store; over 5 % apart: house rule", rows)
+
+
+def _pair_row(kind: str, name: str, pair: "Pair") -> Row:
+    return {
+        "kind": kind,
+        "called": name or None,
+        "one": pair.one.id,
+        "one_aperture_mm": round(pair.one.figures.warp_aperture_mm or 0, 5),
+        "other": pair.other.id,
+        "other_aperture_mm": round(pair.other.figures.warp_aperture_mm or 0, 5),
+        "apart_pct": round(pair.apart_pct, 2),
+    }
+
+
+OVER_STORE: Mapping[str, Callable[[Reader], Table]] = {
+    "equivalents": equivalent_table,
+    "lookalikes": lookalike_table,
+}

@@ -174,11 +174,16 @@ def _slip(ratio: float) -> str | None:
 
 @lru_cache(maxsize=1)
 def _known_sizes_mm() -> tuple[float, ...]:
-    """Every gauge size, every sieve wire, the inch grades' wires and the R 20 preferred numbers (ISO 3)."""
+    """Gauge sizes, sieve wires, the inch grades' wires, R 20 preferred numbers (ISO 3), and customary drawn steps.
+
+    Drawn steps, common practice: .0001 in below .004 in, 0.01 mm from 0.05 to 0.3 mm, 0.05 mm from there to 1 mm.
+    """
     sizes = {float(row["diameter_mm"]) for row in gauges.rows()}
     sizes |= {float(sieve.wire_mm) for sieve in sieves.sieves()}
     sizes |= {float(row["wire_in"]) * 25.4 for row in grades.rows()}
     sizes |= {round(10 ** (step / 20), 2) * 10**decade for step in range(20) for decade in range(-2, 2)}
+    sizes |= {tenth / 10_000 * 25.4 for tenth in range(6, 40)}
+    sizes |= {step / 100 for step in range(5, 30)} | {step / 20 for step in range(6, 21)}
     return tuple(sorted(sizes))
 
 

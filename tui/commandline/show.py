@@ -108,9 +108,9 @@ def _filter_lines(cloth: "Cloth") -> Iterator[str]:
 
 
 def _drawing(cloth: "Cloth", ascii_only: bool) -> list[str]:
-    from tui.widgets.cloth_drawing import draw_lines
+    from tui.widgets.cloth_drawing import draw
 
-    return ["", *draw_lines(cloth.construction, None, width=78, height=14, ascii_only=ascii_only)]
+    return ["", *draw([(one_line(cloth.declared), cloth.construction)], 78, 16, ascii_only=ascii_only)]
 
 
 def _lot_lines(lots: Any) -> Iterator[str]:

@@ -75,7 +75,7 @@ def drop_demo(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     with open_store(setting.location, create=False) as store:
         gone = store.drop_demo()
     if setting.json:
-        setting.write_json({"schema": 1, "dropped": gone})
+        setting.write_json({"schema": 1, "dropped": {"cloths": gone}})
     else:
-        setting.write([f"Taken out: {', '.join(f'{number} {name}' for name, number in gone.items())}."])
+        setting.write([f"Taken out: {gone} invented cloths with their lots, offers and numbers."])
     return ExitCode.DONE

@@ -1,7 +1,6 @@
 """`tables`: the reference tables, each with its source."""
 
 import argparse
-from collections.abc import Callable, Mapping
 from typing import Any
 
 from catalog.errors import NotFoundError
@@ -23,17 +22,13 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     from catalog.report import tables
 
     name = arguments.name
-    over_store: Mapping[str, Callable[[Any], tables.Table]] = {
-        "equivalents": tables.equivalents,
-        "lookalikes": tables.lookalikes,
-    }
     if name in tables.REFERENCE:
         table = tables.REFERENCE[name]()
-    elif name in over_store:
+    elif name in tables.OVER_STORE:
         from catalog.storage.opening import open_store
 
         with open_store(setting.location) as store:
-            table = over_store[name](store)
+            table = tables.OVER_STORE[name](store)
     else:
         raise NotFoundError(f"No table is called {name!r}: there are {', '.join(NAMES)}.")
     if setting.json:
