@@ -92,8 +92,9 @@ def _browse(setting: Setting, mouse: bool) -> int:
         )
         return ExitCode.BAD_INPUT
     from tui.app import browse
+    from tui.places import make_room
 
-    return browse(setting.location, ascii_only=setting.ascii, units=setting.units, mouse=mouse)
+    return browse(make_room(setting.location), ascii_only=setting.ascii, units=setting.units, mouse=mouse)
 
 
 def _start_log(words: list[str]) -> None:

@@ -49,10 +49,9 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
 def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """List what lies inside the limits; where nothing does, say why and what is near."""
     from catalog.search.limit_report import filters_of, limit_report
-    from catalog.storage.opening import open_store
 
     limits, scope = limits_of(arguments), scope_of(arguments)
-    with open_store(setting.location) as store:
+    with setting.open() as store:
         filters = filters_of(limits, scope)
         total = store.count(filters)
         cloths = store.select(filters, arguments.sort, arguments.limit)

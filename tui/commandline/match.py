@@ -100,9 +100,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
 
     request = request_of(arguments.callout, arguments)
     readings_to_match(callout.read(request.text))  # what can't be read needs no store
-    from catalog.storage.opening import open_store
 
-    with open_store(setting.location) as store:
+    with setting.open() as store:
         answer = match(request, store)
         has_demo = store.has_demo
     if setting.json:
@@ -117,10 +116,9 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
 
 
 def _many(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
-    from catalog.storage.opening import open_store
     from tui.commandline.sources import callouts_from
 
-    with open_store(setting.location) as store:
+    with setting.open() as store:
         for number, text in callouts_from(arguments.source, arguments.column):
             _one_of_many(number, text, arguments, setting, store)
     sys.stdout.flush()

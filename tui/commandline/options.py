@@ -5,7 +5,10 @@ import os
 import sys
 from collections.abc import Iterable
 from dataclasses import dataclass
-from typing import Any
+from typing import TYPE_CHECKING, Any
+
+if TYPE_CHECKING:
+    from catalog.storage.store import Store
 
 PLAIN = str.maketrans(
     {"×": "x", "²": "2", "³": "3", "±": "+/-", "µ": "u", "Ø": "dia ", "−": "-", "≈": "~", "≥": ">=", "≤": "<=",
@@ -30,6 +33,13 @@ class Setting:
         from tui.places import store_location
 
         return self.store or store_location()
+
+    def open(self, *, create: bool = True, with_demo: bool = True) -> "Store":
+        """Open the store, making it first where there is none and *create* is set. Raises StoreError."""
+        from catalog.storage.opening import open_store
+        from tui.places import make_room
+
+        return open_store(make_room(self.location), create=create, with_demo=with_demo)
 
     def write(self, lines: Iterable[str]) -> None:
         """Write lines to standard output in what its encoding (or --ascii) can hold."""

@@ -26,9 +26,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Print the sheet of one cloth."""
     from catalog.report.documents import cloth_document, lot_document
     from catalog.report.explain import explain
-    from catalog.storage.opening import open_store
 
-    with open_store(setting.location) as store:
+    with setting.open() as store:
         cloth = find_cloth(store, arguments.cloth)
         lots = store.lots([cloth.id]).get(cloth.id, ())
     steps = explain(cloth) if arguments.explain else ()

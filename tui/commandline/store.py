@@ -28,12 +28,11 @@ def where(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Say where the store is, whether it exists and can be written, and what it holds. Makes nothing."""
     from catalog.search.reader import Filters
     from catalog.storage.existing import exists
-    from catalog.storage.opening import open_store
 
     location = setting.location
     document: dict[str, Any] = {"schema": 1, "store": location, "exists": exists(location)}
     if document["exists"]:
-        with open_store(location, create=False) as store:
+        with setting.open(create=False) as store:
             document |= {
                 "writable": store.is_writable,
                 "demo": store.has_demo,
@@ -58,21 +57,19 @@ def _where_lines(document: dict[str, Any]) -> list[str]:
 def new(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Make a store. One that is there is never written over."""
     from catalog.storage.existing import exists
-    from catalog.storage.opening import open_store
 
     location = setting.location
     if exists(location):
         raise InputError(f"{location} is there already; nothing was changed. Move it aside or name another --store.")
-    with open_store(location, create=True, with_demo=not arguments.without_demo):
+    with setting.open(with_demo=not arguments.without_demo):
         pass
     return where(arguments, setting)
 
 
 def drop_demo(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Take out everything that is marked demo, in one transaction."""
-    from catalog.storage.opening import open_store
 
-    with open_store(setting.location, create=False) as store:
+    with setting.open(create=False) as store:
         gone = store.drop_demo()
     if setting.json:
         setting.write_json({"schema": 1, "dropped": {"cloths": gone}})

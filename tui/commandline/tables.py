@@ -25,9 +25,7 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     if name in tables.REFERENCE:
         table = tables.REFERENCE[name]()
     elif name in tables.OVER_STORE:
-        from catalog.storage.opening import open_store
-
-        with open_store(setting.location) as store:
+        with setting.open() as store:
             table = tables.OVER_STORE[name](store)
     else:
         raise NotFoundError(f"No table is called {name!r}: there are {', '.join(NAMES)}.")
