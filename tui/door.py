@@ -8,26 +8,30 @@ import threading
 from collections import OrderedDict
 from collections.abc import Callable
 from dataclasses import dataclass
-from typing import Any, Protocol
+from typing import TYPE_CHECKING, Any, Protocol
 
 from textual.message import Message
 from textual.message_pump import MessagePump
 
 from catalog.errors import CrossclothError
-from catalog.search.reader import Reader
 
+if TYPE_CHECKING:
+    from catalog.search.reader import Reader
 
-class OpenStore(Reader, Protocol):
-    """What the browser needs of an open store, beside reading."""
+    class OpenStore(Reader, Protocol):
+        """What the browser needs of an open store, beside reading."""
 
-    @property
-    def has_demo(self) -> bool:
-        """True where invented rows are in it."""
-        ...
+        @property
+        def has_demo(self) -> bool:
+            """True where invented rows are in it."""
+            ...
 
-    def close(self) -> None:
-        """Let go of it."""
-        ...
+        def close(self) -> None:
+            """Let go of it."""
+            ...
+
+else:
+    OpenStore = Any  # the start needs none of the search
 
 
 Work = Callable[[Any], Any]

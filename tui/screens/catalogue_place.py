@@ -209,7 +209,7 @@ class CataloguePlace(Place):
         if self.stocked:
             said.append("on the rack only")
         said += self._limits_said()
-        right = f"{self.table.cursor + 1} of {self.total:,} ".replace(",", " ") if self.total else ""
+        right = f"{self.table.cursor + 1:,} of {self.total:,} ".replace(",", " ") if self.total else ""
         left = fit(self.spelled(" " + " · ".join(said)), max(0, width - len(right) - 1))
         return self.spelled_lines([((left + " ", "muted"), (right, "muted"))])
 

@@ -7,7 +7,7 @@ from typing import ClassVar
 from textual.app import ComposeResult
 from textual.binding import BindingType
 from textual.containers import Container
-from textual.events import DescendantFocus, Key, Resize
+from textual.events import Click, DescendantFocus, Key, Resize
 from textual.screen import Screen
 from textual.widgets import Input
 
@@ -69,6 +69,7 @@ class Desk(Screen[None]):
         self._history: list[str] = []
         self.place_id = memory.place if memory.place in PLACES else "match"
         self._hold_message = False
+        self._spans: dict[str, tuple[int, int]] = {}
 
     def compose(self) -> ComposeResult:
         """The three parts."""
@@ -91,7 +92,9 @@ class Desk(Screen[None]):
         pieces: list[Piece] = [(" ", "text")]
         tight = width < 80
         for place in PLACES:
+            start = sum(len(text) for text, _ in pieces)
             key = glyph(keys_of(by_id(f"go_{place}"), self.own_keys)[0])
+            self._spans[place] = (start, start + len(key) + len(TITLES[place]) + 2)
             pieces.append((f"{key} ", "key"))
             here = place == self.place_id
             pieces.append((f"[{TITLES[place]}]", "here") if here else (TITLES[place], "text"))
@@ -138,8 +141,13 @@ class Desk(Screen[None]):
         self.query_one("#places", LineView).show(self._places_line)
         self.query_one("#hints", LineView).show(self._hints_line)
 
-    def on_key(self, event: Key) -> None:
-        """What was said has been seen."""
+    async def on_key(self, event: Key) -> None:
+        """What was said has been seen. Esc and a quick letter come as one key through some terminals."""
+        if event.key.startswith("alt+") and len(event.key) == len("alt+x"):
+            event.stop()
+            event.prevent_default()
+            await self.action_back()
+            self.app.simulate_key(event.key[-1])
         if self._message and not self._hold_message:
             self._message = ""
             self._draw_frame()
@@ -148,6 +156,14 @@ class Desk(Screen[None]):
     def on_descendant_focus(self, event: DescendantFocus) -> None:
         """Other hints for other things."""
         self.query_one("#hints", LineView).show(self._hints_line)
+
+    async def on_click(self, event: Click) -> None:
+        """A click on the name of a place goes there."""
+        if event.widget is not None and event.widget.id == "places":
+            for place, (start, end) in self._spans.items():
+                if start <= event.x < end:
+                    await self.go(place)
+                    return
 
     def on_resize(self, event: Resize) -> None:
         """Side by side where there is room."""
@@ -249,6 +265,8 @@ class Desk(Screen[None]):
         for place in self.query(Place):
             place.look_changed()
         self._draw_frame()
+        for view in self.query(LineView):
+            view.refresh()
 
     def action_copy(self) -> None:
         """Copy the highlighted thing to the terminal's clipboard."""

@@ -65,6 +65,7 @@ class MatchPlace(Place):
     def on_mount(self) -> None:
         """Read what was typed last time; the store is asked when it is open."""
         self.say_in_list(("Opening the store…", "muted"))
+        self.input.select_all()  # what was typed last time stays until something else is typed
         self.call_after_refresh(self._read)
 
     @property

@@ -138,6 +138,11 @@ class StockPlace(Place):
         if shown:
             columns = self.chosen(lot_columns(self.desk.units))
             self.table.show(columns, LotRows(shown, self.desk.units, columns), self.table.cursor)
+        elif not self.lots:
+            self.say_in_list(
+                ("Nothing lies on the rack in this store.", "risk"),
+                ("Lots show here as soon as the store holds any.", "muted"),
+            )
         elif self.only is not None and not self.query_one("#words", LineInput).value:
             self.say_in_list(
                 (f"Nothing of {self.only.name} lies on the rack.", "risk"),

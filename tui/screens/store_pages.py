@@ -78,9 +78,9 @@ class StorePages:
 
 
 def read_page(store: Any, filters: "Filters", sort: str, offset: int, limit: int) -> "Sequence[Cloth]":
-    """So many cloths from *offset* on; a list in memory is simply cut."""
+    """So many cloths from *offset* on; without a way to begin there, what comes before is left out."""
     if hasattr(store, "page"):
         page: Sequence[Cloth] = store.page(filters, sort, offset, limit)
         return page
-    cut: Sequence[Cloth] = store.select(filters, sort)[offset : offset + limit]
-    return cut
+    head: Sequence[Cloth] = store.select(filters, sort, offset + limit)
+    return head[offset:]

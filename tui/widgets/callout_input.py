@@ -18,6 +18,11 @@ class LineInput(Input):
         super().__init__(harmless(value, LONGEST), id=id, placeholder=placeholder, max_length=LONGEST, **rest)
         self.cursor_blink = False
 
+    async def _on_key(self, event: events.Key) -> None:
+        """Esc and a quick letter come as one key through some terminals: that is no text."""
+        if event.key.startswith("alt+"):
+            event.prevent_default()
+
     def _on_paste(self, event: events.Paste) -> None:
         """Put the pasted lines in as one."""
         text = harmless(" ".join(event.text[: 4 * LONGEST].splitlines()), LONGEST)

@@ -68,7 +68,7 @@ def strip_of(line: Line, width: int, table: Mapping[str, Style], under: Style | 
         for text, ink in line
         if text
     ]
-    strip = Strip(segments)
+    strip = Strip(segments).simplify()
     fill = under if under is not None else Style()
     return strip.adjust_cell_length(width, fill)
 

@@ -4,7 +4,7 @@ from collections.abc import Callable, Sequence
 
 from rich.style import Style
 from textual.events import Resize
-from textual.geometry import Size
+from textual.geometry import Region, Size
 from textual.scroll_view import ScrollView
 from textual.strip import Strip
 
@@ -41,7 +41,7 @@ class LineView(Inked, can_focus=False, inherit_bindings=False):
         """Show something else, from its top unless *keep_place*."""
         self._composer = composer
         self._compose_lines()
-        if not keep_place:
+        if not keep_place and self.scroll_offset.y:
             self.scroll_to(y=0, animate=False)
 
     def _compose_lines(self) -> None:
@@ -49,9 +49,23 @@ class LineView(Inked, can_focus=False, inherit_bindings=False):
         if width <= 0:
             return
         self._width = width
-        self._lines = self._composer(width)
+        before, self._lines = self._lines, self._composer(width)
         self.virtual_size = Size(width, len(self._lines))
-        self.refresh(layout=self.styles.height is not None and self.styles.height.is_auto)
+        is_auto = self.styles.height is not None and self.styles.height.is_auto
+        if is_auto and len(before) != len(self._lines):
+            self.refresh(layout=True)
+        else:
+            self._refresh_changed(before)
+
+    def _refresh_changed(self, before: Sequence[Line]) -> None:
+        """Only the lines that differ: a link may be slow."""
+        if len(before) != len(self._lines):
+            self.refresh()
+            return
+        top = self.scroll_offset.y
+        for row, (old, new) in enumerate(zip(before, self._lines, strict=True)):
+            if list(old) != list(new):
+                self.refresh(Region(0, row - top, self.size.width, 1))
 
     def on_resize(self, event: Resize) -> None:
         """Compose again for the new width."""

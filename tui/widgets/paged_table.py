@@ -56,7 +56,9 @@ class NoRows:
 class PagedTable(Inked, can_focus=True, inherit_bindings=False):
     """Rows of any number; the cursor's row carries a sign as well as a colour."""
 
-    cursor = reactive(0)
+    DEFAULT_CSS = "PagedTable { overflow: hidden auto; scrollbar-size: 0 0; }"
+
+    cursor = reactive(0, repaint=False)
 
     class Moved(Message):
         """The cursor is on another row. Read the row from the table: a later move may have followed."""
