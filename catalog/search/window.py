@@ -2,14 +2,16 @@
 
 With a radius r, a pair of figures of weight w each lies within 2w·Δmean² ≤ r² (see search.axes; the rest of
 d² is never negative). Bands of the leading mean are cut out one by one, each with the stretch of mean wire
-that its remaining distance leaves, so that together they hug the ellipse around the point.
+that its remaining distance leaves, so that together they hug the ellipse around the point. What every cloth is
+off in open area at least is taken off beforehand.
 
 Every cloth nearer than r is inside; what else is inside is sorted out by its distance.
 """
 
 from collections.abc import Mapping
 from dataclasses import dataclass
-from math import ceil, expm1, floor, inf, log, sqrt
+from math import ceil, exp, expm1, floor, inf, log, sqrt
+from typing import NamedTuple
 
 from catalog.search.axes import BAND
 from catalog.search.distance import APERTURE_WEIGHT, OPEN_AREA_WEIGHT, RATING_WEIGHT, WIRE_WEIGHT
@@ -37,6 +39,7 @@ class Layout:
     lead: Axis
     band: str | None = None
     wire: Axis | None = None
+    open_area: Axis | None = None
 
 
 @dataclass(frozen=True, slots=True)
@@ -47,23 +50,28 @@ class Bounds:
     wire: Stretch = EVERYWHERE
     wire_over_lead: float = inf
     """Most of (mean wire − mean aperture), in logarithms."""
+    open_area: Stretch = EVERYWHERE
 
     def meet(self, other: "Bounds") -> "Bounds":
         """What lies in both."""
         return Bounds(
-            (max(self.lead[0], other.lead[0]), min(self.lead[1], other.lead[1])),
-            (max(self.wire[0], other.wire[0]), min(self.wire[1], other.wire[1])),
+            _common(self.lead, other.lead),
+            _common(self.wire, other.wire),
             min(self.wire_over_lead, other.wire_over_lead),
+            _common(self.open_area, other.open_area),
         )
 
     @property
     def is_empty(self) -> bool:
         """True where nothing can lie inside."""
-        return self.lead[0] > self.lead[1] or self.wire[0] > self.wire[1]
+        return any(low > high for low, high in (self.lead, self.wire, self.open_area))
 
 
-@dataclass(frozen=True, slots=True)
-class Window:
+def _common(one: Stretch, other: Stretch) -> Stretch:
+    return max(one[0], other[0]), min(one[1], other[1])
+
+
+class Window(NamedTuple):
     """One band with the stretch of mean wire to look at; without bands, a stretch of the lead itself."""
 
     band: int
@@ -77,12 +85,17 @@ def layout(point: Point) -> Layout | None:
     opening = "pitch" if point.is_filter or _pair(point, "aperture", 1.0) is None else "aperture"
     lead = _pair(point, opening, APERTURE_WEIGHT)
     if lead is not None and _takes_whole(point, opening):
-        return Layout(lead, f"{opening}_band", wire)
+        return Layout(lead, f"{opening}_band", wire, _open_area(point) if opening == "aperture" else None)
     if point.is_filter and point.rating_um is not None:
         return Layout(Axis("ln_rating", log(point.rating_um), RATING_WEIGHT))
-    if not point.is_filter and point.open_area_pct is not None:
-        return Layout(Axis("ln_open_area", log(point.open_area_pct), OPEN_AREA_WEIGHT))
-    return Layout(wire) if wire is not None else None
+    alone = _open_area(point) or wire
+    return Layout(alone) if alone is not None else None
+
+
+def _open_area(point: Point) -> Axis | None:
+    if point.is_filter or point.open_area_pct is None:
+        return None
+    return Axis("ln_open_area", log(point.open_area_pct), OPEN_AREA_WEIGHT)
 
 
 def _takes_whole(point: Point, opening: str) -> bool:
@@ -103,10 +116,12 @@ def implied(filters: Filters, plan: Layout) -> Bounds:
     wire = _mean_stretch(ranges, "wire")
     opening = plan.lead.column.removeprefix("ln_").removesuffix("_mean")
     lead = _mean_stretch(ranges, opening) if plan.band else EVERYWHERE
-    least_open = ranges.get("open_area_pct", (None, None))[0]
-    if plan.band != "aperture_band" or least_open is None:
+    if plan.band != "aperture_band":
         return Bounds(lead, wire)
-    return Bounds(lead, wire, most_wire_over_aperture(least_open))
+    least, most = ranges.get("open_area_pct", (None, None))
+    low = -inf if least is None or least <= 0 else log(least) - SLACK
+    high = inf if most is None else log(most) + SLACK if most > 0 else -inf
+    return Bounds(lead, wire, most_wire_over_aperture(exp(low)), (low, high))
 
 
 def _mean_stretch(ranges: Mapping[str, Range], quantity: str) -> Stretch:
@@ -136,16 +151,21 @@ def least_radius(plan: Layout, bounds: Bounds) -> float:
     """No cloth inside *bounds* is nearer than this."""
     lead_gap = plan.lead.weight * _gap(plan.lead.asked, bounds.lead) ** 2
     if plan.wire is None:
-        return sqrt(lead_gap)
+        return sqrt(lead_gap + _open_gap(plan, bounds))
     straight = lead_gap + plan.wire.weight * _gap(plan.wire.asked, bounds.wire) ** 2
     over = max(0.0, plan.wire.asked - plan.lead.asked - bounds.wire_over_lead)
-    slanted = over**2 / (1 / plan.lead.weight + 1 / plan.wire.weight) if over < inf else inf
-    return sqrt(max(straight, slanted))
+    slanted = over**2 / (1 / plan.lead.weight + 1 / plan.wire.weight)
+    return sqrt(max(straight, slanted) + _open_gap(plan, bounds))
+
+
+def _open_gap(plan: Layout, bounds: Bounds) -> float:
+    """What the open area adds to d² at least."""
+    return 0.0 if plan.open_area is None else plan.open_area.weight * _gap(plan.open_area.asked, bounds.open_area) ** 2
 
 
 def largest_radius(plan: Layout, bounds: Bounds) -> float:
     """The windows of this radius hold everything inside *bounds*."""
-    squared = plan.lead.weight * _reach(plan.lead.asked, bounds.lead) ** 2
+    squared = plan.lead.weight * _reach(plan.lead.asked, bounds.lead) ** 2 + _open_gap(plan, bounds)
     if plan.wire is not None:
         squared += plan.wire.weight * _reach(plan.wire.asked, bounds.wire) ** 2
     return sqrt(squared) * (1 + SLACK) + SLACK
@@ -153,23 +173,35 @@ def largest_radius(plan: Layout, bounds: Bounds) -> float:
 
 def windows(plan: Layout, bounds: Bounds, radius: float) -> list[Window]:
     """What to look at for everything within *radius*; *bounds* must be finite. May be empty."""
-    radius = radius * (1 + SLACK) + SLACK
-    low, high = _around(plan.lead, radius**2, bounds.lead)
+    squared = (radius * (1 + SLACK) + SLACK) ** 2 - _open_gap(plan, bounds)
+    if squared < 0:
+        return []
+    low, high = _around(plan.lead, squared, bounds.lead)
     if plan.band is None:
         return [Window(0, low, high)] if low <= high else []
     bands = range(floor(low / BAND), ceil(high / BAND) + 1) if low <= high else range(0)
-    cut = (_window(plan, bounds, radius**2, band) for band in bands)
-    return [window for window in cut if window.low <= window.high]
+    return _bands(plan, bounds, squared, bands)
 
 
-def _window(plan: Layout, bounds: Bounds, squared: float, band: int) -> Window:
-    stretch = (band * BAND - SLACK, (band + 1) * BAND + SLACK)
-    left = squared - plan.lead.weight * _gap(plan.lead.asked, stretch) ** 2
-    if left < 0:
-        return Window(band, inf, -inf)
-    most = min(bounds.wire[1], stretch[1] + bounds.wire_over_lead)
-    around = bounds.wire if plan.wire is None else _around(plan.wire, left, bounds.wire)
-    return Window(band, around[0], min(around[1], most))
+def _bands(plan: Layout, bounds: Bounds, squared: float, bands: range) -> list[Window]:
+    """The windows that aren't empty. There may be a thousand, so the loop is kept lean."""
+    lead, lead_weight = plan.lead.asked, plan.lead.weight
+    wire, wire_weight = (plan.wire.asked, plan.wire.weight) if plan.wire else (0.0, inf)
+    (least, most), over = bounds.wire, bounds.wire_over_lead + SLACK
+    found = []
+    for band in bands:
+        start, end = band * BAND - SLACK, (band + 1) * BAND + SLACK
+        gap = start - lead if start > lead else lead - end if end < lead else 0.0
+        left = squared - lead_weight * gap * gap
+        if left < 0:
+            continue
+        low, high = least, min(most, end + over)
+        if plan.wire:
+            half = sqrt(left / wire_weight) + SLACK
+            low, high = max(low, wire - half), min(high, wire + half)
+        if low <= high:
+            found.append(Window(band, low, high))
+    return found
 
 
 def _around(axis: Axis, squared: float, bounds: Stretch) -> Stretch:

@@ -14,9 +14,7 @@ from catalog.storage.rows import cloth_of_row
 from catalog.storage.selecting import CLOTHS
 
 
-def boxed_cloths(
-    connection: Connection, point: Point, ranges: Mapping[str, Range], filters: Filters
-) -> list[Found]:
+def boxed_cloths(connection: Connection, point: Point, ranges: Mapping[str, Range], filters: Filters) -> list[Found]:
     """Every comparable cloth inside *ranges* and *filters*, in the order of nearest."""
     weaves = weaves_asked(filters, point.is_filter)
     if not weaves:
@@ -34,9 +32,7 @@ def boxed_cloths(
 
 def _bands(ranges: Mapping[str, Range], quantity: str) -> str:
     """The bands of the mean that the box can touch, so that an index serves; '' where a side is open."""
-    lows, highs = zip(
-        *(ranges.get(f"{side}_{quantity}_mm", (None, None)) for side in ("warp", "weft")), strict=True
-    )
+    lows, highs = zip(*(ranges.get(f"{side}_{quantity}_mm", (None, None)) for side in ("warp", "weft")), strict=True)
     if any(bound is None or bound <= 0 for bound in (*lows, *highs)):
         return ""
     low, high = (floor(sum(map(log, bounds)) / 2 / BAND) for bounds in (lows, highs))

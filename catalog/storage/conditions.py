@@ -65,12 +65,17 @@ def weaves_asked(filters: Filters, is_filter: bool | None = None) -> frozenset[W
 
 def add_filters(conditions: Conditions, filters: Filters, weaves: frozenset[Weave]) -> None:
     """Add every condition of *filters*; *weaves* are those that are left of all."""
+    add_kinds(conditions, filters, weaves)
+    conditions.add(conditions.within(filters.ranges))
+    conditions.add(_stock(conditions, filters))
+
+
+def add_kinds(conditions: Conditions, filters: Filters, weaves: frozenset[Weave]) -> None:
+    """Add the conditions that indexes lead with: weave and alloy."""
     if len(weaves) < len(Weave):
         conditions.one_of("c.weave", frozenset(weaves))
     if filters.alloys:
         conditions.one_of("c.alloy", filters.alloys)
-    conditions.add(conditions.within(filters.ranges))
-    conditions.add(_stock(conditions, filters))
 
 
 def _stock(conditions: Conditions, filters: Filters) -> str:

@@ -20,6 +20,14 @@ from catalog.errors import StoreError
 
 APPLICATION_ID = 0x77697265  # 'wire', in the file's header
 TIMEOUT_S = 10.0
+SETTINGS = """
+PRAGMA foreign_keys=ON;
+PRAGMA trusted_schema=OFF;
+PRAGMA synchronous=FULL;
+PRAGMA cache_size=-16000;
+PRAGMA automatic_index=OFF;
+"""
+# automatic_index: given many windows, SQLite would rather index the whole catalogue anew for one search
 
 
 def sqlite_engine(path: Path, mode: str = "rw", timeout_s: float = TIMEOUT_S) -> Engine:
@@ -46,9 +54,7 @@ def _connector(uri: str, timeout_s: float) -> Callable[[], sqlite3.Connection]:
             check_same_thread=False,
             cached_statements=32,
         )
-        raw.executescript(
-            "PRAGMA foreign_keys=ON; PRAGMA trusted_schema=OFF; PRAGMA synchronous=FULL; PRAGMA cache_size=-16000"
-        )
+        raw.executescript(SETTINGS)
         return raw
 
     return connect

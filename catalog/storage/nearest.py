@@ -7,7 +7,7 @@ the statement is trusted to a HAIR, and whoever lies that close to the k-th is l
 
 from collections.abc import Iterable
 from dataclasses import dataclass, replace
-from math import inf, sqrt
+from math import hypot, inf, sqrt
 
 from sqlalchemy import Connection
 
@@ -16,7 +16,7 @@ from catalog.construction import Weave
 from catalog.search.distance import nearness, terms
 from catalog.search.reader import Filters, Point
 from catalog.search.window import Bounds, Layout, implied, largest_radius, layout, least_radius, windows
-from catalog.storage.conditions import Conditions, add_filters, weaves_asked
+from catalog.storage.conditions import Conditions, add_filters, add_kinds, weaves_asked
 from catalog.storage.edges import edges
 from catalog.storage.selecting import cloths_by_id
 from catalog.storage.sources import EVERYTHING, Source, source
@@ -28,6 +28,11 @@ HAIR = 1e-11
 """d² of the statement and of Python agree to this."""
 SPARE = 14
 """Rows asked for beyond k, in case several lie as far as the k-th."""
+MANY = 3000
+"""Rows that may be read without another thought."""
+WIDE = 48
+"""Windows beyond which rows are counted before they are read: a catalogue is a strip (thick wire goes with wide
+apertures), so that a wider look may find nothing new or nearly everything."""
 FIRST_REACH = 0.02
 """How far beyond the nearest possible cloth is looked at first: 1 % in aperture."""
 
@@ -48,7 +53,9 @@ def _nearest(connection: Connection, point: Point, k: int, filters: Filters, onl
     conditions = Conditions()
     conditions.add(only)
     add_filters(conditions, filters, weaves)
-    ids = Search(connection, point, conditions, k).run(layout(point), weaves, filters)
+    kinds = Conditions()
+    add_kinds(kinds, filters, weaves)
+    ids = Search(connection, point, conditions, kinds, k).run(layout(point), weaves, filters)
     return ranked(point, cloths_by_id(connection, ids))[:k]
 
 
@@ -67,11 +74,13 @@ class Search:
     connection: Connection
     point: Point
     conditions: Conditions
+    kinds: Conditions
+    """The weaves and alloys alone, which are read past without looking at a row."""
     k: int
 
     def run(self, plan: Layout | None, weaves: frozenset[Weave], filters: Filters) -> list[str]:
         """Ids of the *k* nearest and of whoever lies as far as the last of them, in no order."""
-        if plan is None:
+        if plan is None or self._rows(EVERYTHING, MANY) < MANY:
             return self._cut(EVERYTHING, self._near(EVERYTHING))
         bounds = edges(self.connection, plan, weaves, filters.alloys).meet(implied(filters, plan))
         return [] if bounds.is_empty else self._grow(plan, bounds)
@@ -79,18 +88,28 @@ class Search:
     def _grow(self, plan: Layout, bounds: Bounds) -> list[str]:
         """Widen until the k-th nearest is inside for certain, or everything is."""
         nearest, furthest = least_radius(plan, bounds), largest_radius(plan, bounds)
-        reach, enough = FIRST_REACH, inf
+        reach, safe, enough, budget = FIRST_REACH, 0.0, inf, MANY
         while True:
-            radius = min(sqrt(nearest**2 + reach**2), enough, furthest)
+            radius = min(hypot(nearest, reach), enough, furthest)
             cut = windows(plan, bounds, radius)
-            read = source(plan, cut) if cut else None
-            near = self._near(read) if read else []
+            read = source(plan, cut)
+            if len(cut) > WIDE and reach > FIRST_REACH and self._rows(read, budget) >= budget:
+                reach, budget = (reach + safe) / 2, 2 * budget
+                continue
+            near = self._near(read)
             inside = sum(1 for _, squared in near if squared <= radius**2)
             if inside >= self.k or radius >= min(enough, furthest):
-                return self._cut(read, near) if read else []
+                return self._cut(read, near)
             if len(near) >= self.k:
                 enough = sqrt(near[self.k - 1][1] + HAIR)
-            reach *= min(4.0, 1.2 * sqrt(self.k / max(inside, 1)))
+            safe, reach = reach, reach * _growth(self.k, inside, bool(near))
+
+    def _rows(self, read: Source, limit: int) -> int:
+        """How many rows of these weaves and alloys *read* looks at; *limit* where it is more."""
+        kinds = self.kinds.driver_sql(self.connection.dialect.paramstyle)
+        rows = f"SELECT 1 FROM {read.tables} WHERE {read.where} AND {kinds} LIMIT {limit}"
+        found = self.connection.exec_driver_sql(f"{read.ahead}SELECT COUNT(*) FROM ({rows}) x", self.kinds.values)
+        return int(found.scalar_one())
 
     def _near(self, read: Source, most: float | None = None) -> list[Near]:
         """(id, d²), nearest first: a few more than *k*, or all up to a d² of *most*."""
@@ -113,3 +132,8 @@ class Search:
         if near[-1][1] <= most and len(near) == self.k + SPARE:
             near = self._near(read, most)
         return [cloth_id for cloth_id, squared in near if squared <= most]
+
+
+def _growth(k: int, inside: int, is_populated: bool) -> float:
+    """By how much to widen: as the density seen suggests (on a plane), within limits."""
+    return max(1.3, min(3.0 if is_populated else 4.0, 1.15 * sqrt(k / max(inside, 1))))

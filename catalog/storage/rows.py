@@ -99,9 +99,7 @@ def row_of_cloth(cloth: Cloth, declared: Declared, derivation: int) -> dict[str,
     }
 
 
-def derived_columns(
-    make: Construction, figures: Figures, rating: Rating | None, derivation: int
-) -> dict[str, Any]:
+def derived_columns(make: Construction, figures: Figures, rating: Rating | None, derivation: int) -> dict[str, Any]:
     """The columns that are computed, with the version of the derivation."""
     return {**asdict(figures), **asdict(axes(make, figures, rating)), "derivation": derivation}
 

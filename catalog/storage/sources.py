@@ -17,13 +17,16 @@ class Source:
 
 
 EVERYTHING = Source("", "cloth c", "1 = 1")
+NOTHING = Source("", "cloth c", "1 = 0")
 
 
 def source(plan: Layout, cut: Sequence[Window]) -> Source:
-    """Read what lies in the windows *cut*, at least one.
+    """Read what lies in the windows *cut*.
 
     The windows drive: CROSS JOIN keeps SQLite from reading the cloths first and looking the windows up.
     """
+    if not cut:
+        return NOTHING
     if plan.band is None:
         low, high = cut[0].low, cut[0].high
         return Source("", "cloth c", f"c.{plan.lead.column} BETWEEN {low!r} AND {high!r}")

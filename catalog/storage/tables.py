@@ -104,16 +104,12 @@ cloth = Table(
 )
 APERTURE_AXES = ("aperture_band", "ln_wire_mean", "ln_aperture_mean", "ln_aperture_skew", "ln_wire_skew")
 PITCH_AXES = ("pitch_band", "ln_wire_mean", "ln_pitch_mean", "ln_pitch_skew", "ln_wire_skew")
-Index(
-    "ix_cloth_apertures", *(cloth.c[n] for n in ("weave", *APERTURE_AXES, "ln_open_area", "open_area_pct", "id"))
-)
+Index("ix_cloth_apertures", *(cloth.c[n] for n in ("weave", *APERTURE_AXES, "ln_open_area", "open_area_pct", "id")))
 Index(
     "ix_cloth_alloy_apertures",
     *(cloth.c[n] for n in ("alloy", "weave", *APERTURE_AXES, "ln_open_area", "open_area_pct", "id")),
 )
-Index(
-    "ix_cloth_pitches", *(cloth.c[n] for n in ("weave", *PITCH_AXES, "ln_rating", "ln_open_area", "alloy", "id"))
-)
+Index("ix_cloth_pitches", *(cloth.c[n] for n in ("weave", *PITCH_AXES, "ln_rating", "ln_open_area", "alloy", "id")))
 Index("ix_cloth_open_area", cloth.c.weave, cloth.c.ln_open_area, cloth.c.id)
 Index("ix_cloth_wires", cloth.c.weave, cloth.c.ln_wire_mean, cloth.c.ln_wire_skew, cloth.c.id)
 Index("ix_cloth_rating", cloth.c.weave, cloth.c.ln_rating, cloth.c.id)

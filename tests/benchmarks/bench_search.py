@@ -24,7 +24,7 @@ os.environ.pop("OPENBLAS_CORETYPE", None)  # a set core type may choose slower k
 
 import numpy as np
 from scipy.spatial import cKDTree
-from synthetic_catalogue import RARE, make
+from synthetic_catalogue import ALLOYS, RARE, make
 
 from catalog.construction import Weave
 from catalog.search.reader import Filters, Point
@@ -36,6 +36,7 @@ WEIGHTS = np.sqrt([2.0, 2.0, 1.0, 1.0, 1.0])
 TURNED = [1, 0, 3, 2, 4]
 SAME = 1e-9
 SLOW = 12
+ALLOY_CODES = {alloy: code for code, alloy in enumerate(ALLOYS)}
 OPEN_WEAVES = (Weave.PLAIN.value, Weave.TWILLED.value)
 KINDS: dict[str, Filters] = {
     "none": Filters(),
@@ -63,28 +64,30 @@ class Arrays:
     def mask(self, filters: Filters) -> "np.ndarray | None":
         parts = []
         if filters.alloys:
-            parts.append(np.isin(self.alloy, sorted(filters.alloys)))
+            parts.append(_among(self.alloy, [ALLOY_CODES[alloy] for alloy in filters.alloys]))
         if filters.weaves:
-            parts.append(np.isin(self.weave, sorted(w.value for w in filters.weaves)))
+            parts.append(_among(self.weave, [OPEN_WEAVES.index(weave) for weave in filters.weaves]))
         for low, _ in filters.ranges.values():
             parts.append(self.open_area >= low)
         return np.logical_and.reduce(parts) if parts else None
+
+
+def _among(codes: np.ndarray, wanted: list[int]) -> np.ndarray:
+    return np.logical_or.reduce([codes == code for code in wanted])
 
 
 def load(path: Path) -> Arrays:
     """Read what numpy needs."""
     columns = "id, warp_aperture_mm, weft_aperture_mm, warp_wire_mm, weft_wire_mm, open_area_pct, alloy, weave"
     with sqlite3.connect(path) as raw:
-        rows = raw.execute(
-            f"SELECT {columns} FROM cloth WHERE weave IN (?, ?) ORDER BY id", OPEN_WEAVES
-        ).fetchall()
+        rows = raw.execute(f"SELECT {columns} FROM cloth WHERE weave IN (?, ?) ORDER BY id", OPEN_WEAVES).fetchall()
     raw.close()
     figures = np.array([row[1:6] for row in rows])
     return Arrays(
         np.array([row[0] for row in rows]),
         np.ascontiguousarray(np.log(figures) * WEIGHTS),
-        np.array([row[6] for row in rows]),
-        np.array([row[7] for row in rows]),
+        np.array([ALLOY_CODES[row[6]] for row in rows], dtype=np.int8),
+        np.array([OPEN_WEAVES.index(row[7]) for row in rows], dtype=np.int8),
         figures[:, 4].copy(),
     )
 
@@ -192,9 +195,7 @@ def agrees(ours: list[tuple[str, float]], theirs: list[tuple[str, float]]) -> bo
     """Same distances; the same cloths wherever the distance tells them apart; ties by id."""
     if len(ours) != len(theirs) or any(abs(a[1] - b[1]) > SAME for a, b in zip(ours, theirs, strict=True)):
         return False
-    return {cid for cid, _ in ours} == {cid for cid, _ in theirs} and ours == sorted(
-        ours, key=lambda x: (x[1], x[0])
-    )
+    return {cid for cid, _ in ours} == {cid for cid, _ in theirs} and ours == sorted(ours, key=lambda x: (x[1], x[0]))
 
 
 def spread(times: list[float]) -> dict[str, float]:

@@ -4,7 +4,7 @@ from collections.abc import Callable, Iterable
 from fractions import Fraction
 from pathlib import Path
 
-from catalog.cloth import Cloth, Rating
+from catalog.cloth import Cloth, Figures, Rating
 from catalog.construction import Construction, Weave, Wires
 from catalog.figures import figures
 from catalog.search.list_reader import ListReader
@@ -37,13 +37,18 @@ def make_cloth(
         id=cloth_id,
         name=cloth_id,
         construction=make,
-        figures=figures(make, density_kg_m3),
+        figures=_plausible(make) if weave.is_filter else figures(make, density_kg_m3),
         declared=f"pitch {warp[0]} × {weft[0]} mm",
         unit_system="metric",
         source="made for a test",
         rating=None if rating is None else Rating(rating, "nominal"),
         demo=demo,
     )
+
+
+def _plausible(make: Construction) -> Figures:
+    """Figures for filter cloth of any make: what can be woven is no question here."""
+    return Figures(None, None, None, 1.5, 1.5, float(make.warp.wire_mm + 2 * make.weft.wire_mm), 0.4)
 
 
 def declared_of(cloth: Cloth) -> Declared:

@@ -14,6 +14,7 @@ from catalog.construction import Weave
 from catalog.search.list_reader import ListReader
 from catalog.search.reader import Filters, Point
 from catalog.stock.lots import Lot
+from catalog.storage import nearest
 from catalog.storage.opening import open_store
 from catalog.storage.store import Store
 
@@ -54,14 +55,18 @@ def _cloth(dice: random.Random, cloth_id: str, is_smooth: bool) -> Cloth:
     return make_cloth(cloth_id, warp, weft, weave, dice.choice(ALLOYS), rating)
 
 
-@pytest.fixture(scope="module", params=["clumpy", "smooth", "tiny"])
+@pytest.fixture(scope="module", params=["clumpy", "smooth", "tiny", "read whole"])
 def both(
     request: pytest.FixtureRequest, tmp_path_factory: pytest.TempPathFactory
 ) -> Iterator[tuple[Store, ListReader]]:
-    size = 12 if request.param == "tiny" else 500
+    """Small catalogues, searched through windows as a large one is; the last as small ones are, read whole."""
+    size = 12 if request.param == "tiny" else 300
     cloths, lots = catalogue(7, size, request.param == "smooth")
     path = fill_file(tmp_path_factory.mktemp("exact") / "store.db", cloths, lots)
-    with open_store(path) as store:
+    with pytest.MonkeyPatch.context() as patch, open_store(path) as store:
+        if request.param != "read whole":
+            patch.setattr(nearest, "MANY", 1)
+            patch.setattr(nearest, "WIDE", 4)
         yield store, ListReader(cloths, lots)
 
 
@@ -113,8 +118,7 @@ def points(draw: st.DrawFn) -> Point:
 bounds = st.tuples(st.none() | st.floats(0.01, 50), st.none() | st.floats(0.05, 90))
 filters = st.builds(
     Filters,
-    alloys=st.just(frozenset[str]())
-    | st.frozensets(st.sampled_from(("304", "316L", "C-276", "nosuch")), min_size=1),
+    alloys=st.just(frozenset[str]()) | st.frozensets(st.sampled_from(("304", "316L", "C-276", "nosuch")), min_size=1),
     weaves=st.just(frozenset[Weave]()) | st.frozensets(st.sampled_from(Weave), min_size=1),
     is_filter=st.sampled_from((None, None, None, True, False)),
     ranges=st.dictionaries(
@@ -131,7 +135,7 @@ filters = st.builds(
     least_width_mm=st.none() | st.sampled_from((500, 580, 981)),
     least_area_m2=st.none() | st.sampled_from((0.4, 5.0, 9.8)),
 )
-thorough = settings(max_examples=120, deadline=None, suppress_health_check=[HealthCheck.function_scoped_fixture])
+thorough = settings(max_examples=50, deadline=None, suppress_health_check=[HealthCheck.function_scoped_fixture])
 few = st.sampled_from((1, 2, 5, 50, 600))
 
 
@@ -148,14 +152,12 @@ def test_the_nearest_of_all(both: tuple[Store, ListReader], point: Point, k: int
 
 @thorough
 @given(point=points(), k=few, filters=filters)
-def test_the_nearest_inside_filters(
-    both: tuple[Store, ListReader], point: Point, k: int, filters: Filters
-) -> None:
+def test_the_nearest_inside_filters(both: tuple[Store, ListReader], point: Point, k: int, filters: Filters) -> None:
     store, plain = both
     assert shown(store.nearest(point, k, filters)) == shown(plain.nearest(point, k, filters))
 
 
-@settings(thorough, max_examples=50)
+@settings(thorough, max_examples=25)
 @given(
     point=points(),
     filters=filters,
@@ -168,13 +170,11 @@ def test_everything_in_a_box(
 ) -> None:
     store, plain = both
     opening = "pitch" if point.is_filter else "aperture"
-    ranges = {
-        f"{side}_{opening}_mm": (low, low * width) for side in ("warp", "weft") if sides in ("both", side[1])
-    }
+    ranges = {f"{side}_{opening}_mm": (low, low * width) for side in ("warp", "weft") if sides in ("both", side[1])}
     assert shown(store.box(point, ranges, filters)) == shown(plain.box(point, ranges, filters))
 
 
-@settings(thorough, max_examples=60)
+@settings(thorough, max_examples=40)
 @given(
     filters=filters,
     sort=st.sampled_from(("aperture", "wire", "open-area", "mass", "id")),
@@ -193,3 +193,35 @@ def test_a_cloth_comes_back_as_it_was_written(both: tuple[Store, ListReader]) ->
     assert store.cloth(written[0].id) == written[0]
     assert store.cloth("nosuch") is None
     assert store.lots([cloth.id for cloth in written]) == plain.lots([cloth.id for cloth in written])
+
+
+POINTS = {
+    "aperture": Point(False, 0.25, 0.25, None, None, 0.16, 0.16, 37.2),
+    "alloy": Point(False, 0.25, 0.25, None, None, 0.16, 0.16, 37.2),
+    "count": Point(warp_pitch_mm=0.4233, weft_pitch_mm=0.4233),
+    "filter": Point(True, None, None, 1.0, 0.2, 0.3, 0.2, rating_um=10.0),
+    "rating": Point(True, rating_um=10.0),
+    "open": Point(open_area_pct=40.0),
+}
+
+
+@pytest.mark.parametrize("kind", POINTS)
+def test_the_search_reads_along_an_index(both: tuple[Store, ListReader], kind: str) -> None:
+    """Every statement of a search seeks in an index by equality or range; none scans a table or makes an index."""
+    store, _ = both
+    filters = Filters(alloys=frozenset({"316L"})) if kind == "alloy" else Filters()
+    said: list[str] = []
+    with store.reading() as connection:
+        raw = connection.connection.driver_connection
+        assert raw is not None
+        raw.set_trace_callback(said.append)
+        nearest.nearest_cloths(connection, POINTS[kind], 50, filters)
+        raw.set_trace_callback(None)
+        searches = [sql for sql in said if " AS d2 " in sql]
+        plans = [row[3] for sql in searches for row in connection.exec_driver_sql(f"EXPLAIN QUERY PLAN {sql}")]
+    assert searches
+    ways = [plan for plan in plans if plan.startswith(("SEARCH c", "SCAN c"))]
+    assert ways
+    assert all(way.startswith("SEARCH c USING") and " INDEX ix_cloth_" in way for way in ways), ways
+    if kind in ("aperture", "alloy", "count"):
+        assert all("COVERING INDEX" in way for way in ways), ways
