@@ -3,7 +3,7 @@
 Peirce (1937) takes a wire as straight parts joined by arcs that lie on the wires it crosses. D = d1 + d2.
 """
 
-from math import asin, atan2, cos, sin, sqrt
+from math import atan2, sqrt
 
 from catalog.physics.domain import OutOfDomainError, require_between, require_positive
 
@@ -13,14 +13,14 @@ ROUNDING = 1e-9
 def arc_length_mm(pitch_mm: float, wires_mm: float, crimp_height_mm: float) -> float:
     """Length of wire from one crossing to the next.
 
-    R = √(p² + (D − h)²), θ = asin(D/R) − atan2(D − h, p), s = (h − D·(1 − cos θ)) / sin θ, l = s + D·θ
+    l = s + D·θ, straight part s = √(p² + (D − h)² − D²), the same as (h − D·(1 − cos θ)) / sin θ
 
     Parameters:
         pitch_mm: pitch of the wires that are crossed, p [mm], above 0
         wires_mm: sum of both diameters, D [mm], above 0
         crimp_height_mm: how far the wire's axis rises from crossing to crossing, h [mm], 0 to D
     Returns: length of the wire's axis over one pitch [mm], at least the pitch. Scalars only.
-    Raises: OutOfDomainError where h is outside 0 to D or the wires are jammed (no straight part, s < 0).
+    Raises: OutOfDomainError where h is outside 0 to D or the wires are jammed (no straight part is left).
     Valid: round wires that bend without stiffness and keep their section.
     **Source**: Peirce, The geometry of cloth structure, J. Textile Inst. 28 (1937) T45.
     **Check value**: crimp 0.2092, θ 60° for p/D 0.866, h = D/2 (source: Peirce 1937, jammed square cloth).
@@ -29,29 +29,21 @@ def arc_length_mm(pitch_mm: float, wires_mm: float, crimp_height_mm: float) -> f
     >>> round(arc_length_mm(sqrt(3) / 2, 1.0, 0.5) / (sqrt(3) / 2) - 1, 4)
     0.2092
     """
-    theta = weave_angle_rad(pitch_mm, wires_mm, crimp_height_mm)
-    if theta == 0.0:
-        return pitch_mm
-    straight = (crimp_height_mm - wires_mm * (1.0 - cos(theta))) / sin(theta)
-    if straight < -ROUNDING * pitch_mm:
-        raise OutOfDomainError(
-            f"Wires of {wires_mm:g} mm together are jammed at a pitch of {pitch_mm:g} mm "
-            f"and a crimp height of {crimp_height_mm:g} mm: a wider pitch was expected."
-        )
-    return max(straight, 0.0) + wires_mm * theta
+    straight, theta = _straight_and_angle(pitch_mm, wires_mm, crimp_height_mm)
+    return straight + wires_mm * theta
 
 
 def weave_angle_rad(pitch_mm: float, wires_mm: float, crimp_height_mm: float) -> float:
     """Steepest angle of a crimped wire's axis against the plane of the cloth.
 
-    θ = asin(D/R) − atan2(D − h, p), R = √(p² + (D − h)²)
+    θ = atan2(D, s) − atan2(D − h, p), s = √(p² + (D − h)² − D²)
 
     Parameters:
         pitch_mm: pitch of the wires that are crossed, p [mm], above 0
         wires_mm: sum of both diameters, D [mm], above 0
         crimp_height_mm: how far the wire's axis rises from crossing to crossing, h [mm], 0 to D
     Returns: angle [rad], 0 to π/2. Scalars only.
-    Raises: OutOfDomainError where h is outside 0 to D or the wires overlap (R < D).
+    Raises: OutOfDomainError where h is outside 0 to D or the wires are jammed.
     Valid: as arc_length_mm.
     **Source**: Peirce 1937: D − h = D·cos θ − s·sin θ and p = s·cos θ + D·sin θ, solved for θ.
     **Check value**: 60° for p/D 0.866, h = D/2 (source: Peirce 1937, jammed square cloth).
@@ -60,15 +52,21 @@ def weave_angle_rad(pitch_mm: float, wires_mm: float, crimp_height_mm: float) ->
     >>> round(degrees(weave_angle_rad(sqrt(3) / 2, 1.0, 0.5)), 3)
     60.0
     """
-    require_positive(pitch_mm=pitch_mm, wires_mm=wires_mm)
-    require_between(0.0, wires_mm, crimp_height_mm=crimp_height_mm)
-    rise = wires_mm - crimp_height_mm
-    reach = sqrt(pitch_mm**2 + rise**2)
-    if reach < wires_mm * (1 - ROUNDING):
+    return _straight_and_angle(pitch_mm, wires_mm, crimp_height_mm)[1]
+
+
+def _straight_and_angle(p: float, D: float, h: float) -> tuple[float, float]:
+    require_positive(pitch_mm=p, wires_mm=D)
+    require_between(0.0, D, crimp_height_mm=h)
+    # p² + (D − h)² − D², written so that nothing cancels where h is small
+    squared = p * p - h * (2.0 * D - h)
+    if squared < -ROUNDING * D * D:
         raise OutOfDomainError(
-            f"Wires of {wires_mm:g} mm together overlap at a pitch of {pitch_mm:g} mm: a wider pitch was expected."
+            f"Wires of {D:g} mm together are jammed at a pitch of {p:g} mm and a crimp height of {h:g} mm: "
+            "a wider pitch was expected."
         )
-    return max(asin(min(wires_mm / reach, 1.0)) - atan2(rise, pitch_mm), 0.0)
+    straight = sqrt(max(squared, 0.0))
+    return straight, max(atan2(D, straight) - atan2(D - h, p), 0.0)
 
 
 def crimp(pitch_mm: float, wires_mm: float, crimp_height_mm: float) -> float:

@@ -13,8 +13,8 @@ from math import asin, cos, sin
 
 from catalog.physics.domain import OutOfDomainError, require_positive
 
-CHORDS = 8
-"""Straight pieces in an arc."""
+CHORDS = 12
+"""Straight pieces in an arc, laid half inside, half outside it."""
 
 Point = tuple[float, float, float]
 Piece = tuple[float, float, float, float, float, float, float, float, int]
@@ -57,8 +57,8 @@ class DutchWeave:
 
     @property
     def chord_error_mm(self) -> float:
-        """How far a straight piece lies inside its arc at most, mm."""
-        return self.half_height_mm * (1.0 - cos(self.angle_rad / CHORDS / 2.0))
+        """How far a straight piece lies off its arc at most, mm."""
+        return self.half_height_mm * (1.0 - cos(self.angle_rad / CHORDS / 2.0)) / 2.0
 
 
 def pieces(weave: DutchWeave) -> list[Piece]:
@@ -85,8 +85,9 @@ def _weft_path(weave: DutchWeave, weft: int, warp: int) -> list[Point]:
         flat = [(0.0, H), (P, H)]
     else:
         arc = [weave.angle_rad * k / CHORDS for k in range(CHORDS + 1)]
-        flat = [(H * sin(a), H * cos(a)) for a in arc]
-        flat += [(P - H * sin(a), -H * cos(a)) for a in reversed(arc)]
+        R = H + weave.chord_error_mm
+        flat = [(R * sin(a), R * cos(a)) for a in arc]
+        flat += [(P - R * sin(a), -R * cos(a)) for a in reversed(arc)]
     side = 1.0 if up0 else -1.0
     return [(warp * P + x, y0 + (y1 - y0) * x / P, side * z) for x, z in flat]
 

@@ -265,7 +265,7 @@ def sphere_twilled_dutch_um(
         weft_pitch_mm: pitch of the weft wires, s [mm], above 0
         warp_wire_mm: warp wire diameter, D [mm], above 0
         weft_wire_mm: weft wire diameter, d [mm], above 0
-        resolution_pct: wanted ± of the answer in percent of it [%], 0.2 to 25
+        resolution_pct: wanted ± of the answer in percent of it [%], 1 to 25
         most_boxes: boxes after which the search gives up unconverged [-]
     Returns: sphere diameter with its ± [µm] and whether that is as fine as wanted. Scalars only.
     Raises: OutOfDomainError where a figure is outside its range or the weft doesn't fit between warp wires.
@@ -279,10 +279,8 @@ def sphere_twilled_dutch_um(
     >>> found.converged, abs(found.sphere_um - 41.0) < 2.9 + found.resolution_um
     (True, True)
     """
-    require_between(0.2, 25.0, resolution_pct=resolution_pct)
+    require_between(1.0, 25.0, resolution_pct=resolution_pct)
     weave = DutchWeave(warp_pitch_mm, weft_pitch_mm, warp_wire_mm, weft_wire_mm, is_twilled=True)
-    share = 2.0 * resolution_pct / (100.0 + resolution_pct)
-    least, most = sphere_bounds_mm(weave, share, most_boxes)
+    least, most = sphere_bounds_mm(weave, resolution_pct / 100.0, most_boxes)
     sphere, half = (least + most) / 2.0, (most - least) / 2.0
-    resolution = half + 2.0 * weave.chord_error_mm
-    return SphereEstimate(1000.0 * sphere, 1000.0 * resolution, half <= resolution_pct / 100.0 * sphere * (1 + 1e-9))
+    return SphereEstimate(1000.0 * sphere, 1000.0 * half, half <= resolution_pct / 100.0 * sphere * (1 + 1e-9))

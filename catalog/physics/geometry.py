@@ -173,7 +173,7 @@ def is_jammed(pitch_mm: float, wire_mm: float, other_wire_mm: float, twilled: bo
         wire_mm: their diameter, d1 [mm], above 0
         other_wire_mm: diameter of the wire that crosses them, d2 [mm], above 0
         twilled: whether the weave is a 2/2 twill [-]
-    Returns: True where the cloth can't be woven so. Scalars only.
+    Returns: True where the cloth can't be woven so [-]. Scalars only.
     Raises: OutOfDomainError where a figure isn't above 0.
     Valid: one direction by itself; cloth that isn't square may shift its crimp, see cannot_be_woven.
     **Source**: plain: Peirce 1937, jammed cloth; twill: derived: of two pitches one has a crossing and the
@@ -202,7 +202,7 @@ def cannot_be_woven(
         warp_wire_mm: warp wire diameter, d1 [mm], above 0
         weft_wire_mm: weft wire diameter, d2 [mm], above 0
         is_twilled: whether the weave is a 2/2 twill [-]
-    Returns: True where the cloth is tighter than jammed. Scalars only.
+    Returns: True where the cloth is tighter than jammed [-]. Scalars only.
     Raises: OutOfDomainError where a figure isn't above 0.
     Valid: square and rectangular cloth of round wires that keep their section.
     **Source**: Peirce 1937, cloth jammed both ways: cos θ1 + cos θ2 = 1; twill derived as in is_jammed.
@@ -228,7 +228,7 @@ def opening_shape(warp_aperture_mm: float, weft_aperture_mm: float) -> str:
     Parameters:
         warp_aperture_mm: width between warp wires [mm], above 0
         weft_aperture_mm: length between weft wires [mm], above 0
-    Returns: 'square', 'oblong' (longer than wide) or 'broad' (wider than long). Scalars only.
+    Returns: 'square', 'oblong' (longer than wide) or 'broad' (wider than long) [-]. Scalars only.
     Raises: OutOfDomainError where an aperture isn't above 0.
     Valid: square and rectangular cloth; figures that differ only by float noise (1 in 10⁹) count as equal.
     **Source**: common practice, no printed source.

@@ -65,7 +65,7 @@ def does_substitute_cross(
         offered_mm: nominal opening offered [mm], above 0
         largest_oversize_mm: largest single oversize of either [mm], 0 or more
         step_of: looks up the step of a table of safety distances, given an opening [mm]; None beyond its end
-    Returns: True where the step is higher or the table no longer applies. Scalars only.
+    Returns: True where the step is higher or the table no longer applies [-]. Scalars only.
     Raises: OutOfDomainError as governing_opening.
     Valid: as governing_opening.
     **Source**: as governing_opening.

@@ -180,7 +180,7 @@ def does_flake_pass(
         flake_thickness_mm: its thickness [mm], above 0
         warp_aperture_mm: clear width between warp wires [mm], above 0
         weft_aperture_mm: clear width between weft wires [mm], above 0
-    Returns: True where it can pass at some turn. Scalars only.
+    Returns: True where it can pass at some turn [-]. Scalars only.
     Raises: OutOfDomainError where a figure isn't above 0.
     Valid: rigid flake that stands upright on the cloth; how likely that is, is another question.
     **Source**: Carver, Solution to problem E1225, American Mathematical Monthly 64 (1957) 114 (from memory).

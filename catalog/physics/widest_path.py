@@ -21,23 +21,25 @@ COARSE = 0.6
 def sphere_bounds_mm(weave: DutchWeave, share: float, most_boxes: int) -> tuple[float, float]:
     """Least and greatest diameter that the largest sphere can have, mm; 0, 0 where the weave is closed.
 
-    Ends when they lie within *share* of the greater, or when *most_boxes* are held.
+    Ends when half their distance is within *share* of their mean, or when *most_boxes* are held. What the
+    straight pieces in place of arcs can be off by is inside the bounds.
     """
-    passage = Passage(weave)
+    passage, slack = Passage(weave), weave.chord_error_mm
     least, most = 0.0, inf
     steps: list[tuple[float, Box, Box]] = []
     while len(passage.boxes) < most_boxes:
         most, blocked = widest_path(passage, lambda box: passage.boxes[box].most_mm, least)
-        if most <= 0.0:
+        if most + slack <= 0.0:
             return 0.0, 0.0
-        if any(box not in passage.boxes for _, *pair in steps for box in pair) or not steps:
+        if not steps or any(box not in passage.boxes for _, *pair in steps for box in pair):
             _, clear = widest_path(passage, lambda box: passage.boxes[box].centre_mm)
             steps = [(passage.least_between(a, b), a, b) for a, b in pairwise(clear)]
             least = max(least, min(steps)[0])
-        if most - least <= share * most:
+        if most - least + 2.0 * slack <= share * (most + least):
             break
-        _refine(passage, blocked, steps, most, most * (1.0 - share), least)
-    return 2.0 * least, 2.0 * most
+        target = (most * (1.0 - share) + 2.0 * slack) / (1.0 + share)
+        _refine(passage, blocked, steps, most, target, least)
+    return 2.0 * max(least - slack, 0.0), 2.0 * (most + slack)
 
 
 def _refine(
