@@ -73,6 +73,7 @@ COMMANDS: tuple[Command, ...] = (
     Command("sort", ("o",), "Order", "Order the list by the next figure.", LIST),
     Command("find", ("f",), "Find", "Find a row by a word in it, as you type.", LIST),
     Command("find_next", ("n",), "Next", "Go to the next row with that word.", LIST),
+    Command("sums", ("i",), "Sums", "Lay out the sums behind a cloth's figures, with their sources.", LIST),
     Command("columns", ("hash",), "Choose columns", "Choose which columns a list shows.", LIST),
     Command("purpose", ("p",), "Purpose", "Change what the cloth is for, which decides what hurts.", MATCH, True),
     Command("tolerance", ("t",), "Tolerance", "Change what the aperture may be off by.", MATCH, True),

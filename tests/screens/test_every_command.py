@@ -235,6 +235,15 @@ async def _(d: Driver, key: str) -> None:
     assert d.desk.memory.columns["match"] == ["mass", "rack"]
 
 
+@proof("sums")
+async def _(d: Driver, key: str) -> None:
+    await d.press("down", "down", key)
+    assert "w = p − d" in d.text
+    assert "0.39 − 0.14 = 0.25" in d.text
+    await d.press("escape")
+    assert d.app.screen is d.desk
+
+
 @proof("purpose")
 async def _(d: Driver, key: str) -> None:
     await d.press(key)
@@ -340,6 +349,7 @@ async def _(d: Driver, key: str) -> None:
     await d.press(key, key)
     assert "twilled" in d.text
     assert "No cloth lies inside all of these limits." in d.text
+    assert "Without the limit on weave: 6" in d.text
 
 
 @proof("family")

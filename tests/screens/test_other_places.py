@@ -90,6 +90,15 @@ async def test_a_gauge_is_looked_up_in_every_system() -> None:
         assert any(row[0] == "SWG" and row[1] == "28" and "0.0148" in row for row in rows)
 
 
+async def test_inch_and_metric_cloth_of_one_opening_are_set_against_each_other() -> None:
+    async with browser() as d:
+        await d.press("f5", "t", "t", "t", "t")
+        assert "[equivalents]" in d.text
+        assert "computed from this store" in d.text
+        await d.press("t")
+        assert "[lookalikes]" in d.text
+
+
 async def test_back_returns_to_where_one_was() -> None:
     async with browser() as d:
         await d.press("down", "f3", "down", "f4", "escape")

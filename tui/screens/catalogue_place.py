@@ -19,20 +19,15 @@ from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import PagedTable
 
 if TYPE_CHECKING:
-    from catalog.callout.reading import Understanding
+    from catalog.callout.reading import Reading, Understanding
     from catalog.cloth import Cloth
+    from catalog.search.limit_report import LimitReport
     from catalog.search.reader import Filters, Range
     from catalog.stock.lots import Lot
 
 SORTS: Mapping[str, str] = {
     "aperture": "apert-mm", "wire": "wire-mm", "open-area": "open", "mass": "mass", "id": "id",
 }  # fmt: skip
-LIMIT_RANGES: Mapping[str, tuple[str, ...]] = {
-    "aperture_mm": ("warp_aperture_mm", "weft_aperture_mm"),
-    "wire_mm": ("warp_wire_mm", "weft_wire_mm"),
-    "open_area_pct": ("open_area_pct",),
-    "mass_kg_m2": ("mass_kg_m2",),
-}
 HINT = "limits in words:  aperture <= 0.8 mm, open area >= 45 %, wire >= 0.35 mm, 304"
 
 
@@ -83,24 +78,37 @@ class CataloguePlace(Place):
         rows = self.table.rows
         return rows.cloth(self.table.cursor) if isinstance(rows, StorePages) and rows.total else None
 
-    def filters(self) -> "Filters":
-        """The limits as the store understands them."""
+    @property
+    def reading(self) -> "Reading | None":
+        """How the typed limits were read."""
+        alive = self.understanding.surviving if self.understanding else ()
+        return alive[0] if alive else None
+
+    def limits(self) -> "dict[str, Range]":
+        """The typed limits that figures of the catalogue can be held against."""
+        from catalog.search.limit_report import FIGURES
+
+        return {key: b for key, b in self.reading.limits.items() if key in FIGURES} if self.reading else {}
+
+    def scope(self) -> "Filters":
+        """Weave, alloy and stock."""
         from catalog.construction import Weave
         from catalog.search.reader import Filters
 
-        reading = self.understanding.surviving[0] if self.understanding and self.understanding.surviving else None
-        ranges: dict[str, Range] = {}
-        weave, alloy = self.weave, self.alloy
-        if reading is not None:
-            ranges = {name: b for key, b in reading.limits.items() for name in LIMIT_RANGES.get(key, ())}
-            weave = weave or (reading.weave.value if reading.weave else None)
-            alloy = alloy or reading.alloy
+        reading = self.reading
+        weave = self.weave or (reading.weave.value if reading and reading.weave else None)
+        alloy = self.alloy or (reading.alloy if reading else None)
         return Filters(
             alloys=frozenset({alloy} if alloy else ()),
             weaves=frozenset({Weave(weave)} if weave else ()),
-            ranges=ranges,
             in_stock=self.stocked,
         )
+
+    def filters(self) -> "Filters":
+        """All of it, as the store understands it."""
+        from catalog.search.limit_report import filters_of
+
+        return filters_of(self.limits(), self.scope())
 
     def on_input_changed(self, event: Input.Changed) -> None:
         """Read the limits again."""
@@ -126,11 +134,7 @@ class CataloguePlace(Place):
         self.total = total
         columns = self.chosen(cloth_columns(self.desk.units))
         if not total:
-            self.table.show(columns, self.table.rows)
-            self.say_in_list(
-                ("No cloth lies inside all of these limits.", "risk"),
-                ("Widen one: e and a show every weave and alloy, s shows more than the rack.", "muted"),
-            )
+            self._explain_nothing()
         else:
             rows = StorePages(
                 self.desk.door,
@@ -144,6 +148,25 @@ class CataloguePlace(Place):
             self.table.sorted_by = SORTS[self.sort]
             self.table.show(columns, rows)
         self._redraw()
+
+    def _explain_nothing(self) -> None:
+        """Say what each limit removed and what falls just short."""
+        limits, scope, units = self.limits(), self.scope(), self.desk.units
+        way_on = ("Widen one: e and a show every weave and alloy, s shows more than the rack.", "muted")
+        self.say_in_list(("No cloth lies inside all of these limits.", "risk"), way_on)
+
+        def work(store: Any) -> "LimitReport":
+            from catalog.search.limit_report import limit_report
+
+            return limit_report(limits, scope, store)
+
+        def got(report: "LimitReport") -> None:
+            from tui.widgets.limit_lines import limit_lines
+
+            if not self.total:
+                self.say_in_list(*limit_lines(report, units), way_on)
+
+        self.desk.door.ask("limits", work, got, self._failed)
 
     def _arrived(self) -> None:
         self.table.forget()
@@ -222,9 +245,9 @@ class CataloguePlace(Place):
         if not understanding.surviving:
             problem = understanding.problems[0].message if understanding.problems else "not understood"
             return [f"! {harmless(problem)}"]
-        limits = understanding.surviving[0].limits
-        left_out = [key for key in limits if key not in LIMIT_RANGES]
-        words = limit_words({k: v for k, v in limits.items() if k in LIMIT_RANGES}, self.desk.units)
+        limits, used = understanding.surviving[0].limits, self.limits()
+        left_out = [key for key in limits if key not in used]
+        words = limit_words(used, self.desk.units)
         if left_out:
             words.append("! not used here: " + ", ".join(left_out))
         if not limits and understanding.surviving[0].warp.wire is not None:

@@ -1,15 +1,10 @@
 """The help screen: every command of the one list, those of the place in front first."""
 
-from collections.abc import Mapping
-from typing import ClassVar
-
-from textual.app import ComposeResult
-from textual.binding import Binding, BindingType
-from textual.screen import ModalScreen
+from collections.abc import Mapping, Sequence
 
 from tui.commands import EVERYWHERE, LIST, PLACES, at, key_words
 from tui.presenting import SEALS, Line, plain, width_of, wrapped
-from tui.widgets.line_view import LineView
+from tui.screens.overlay import Overlay
 
 HEADS = {EVERYWHERE: "Everywhere", LIST: "In lists"}
 
@@ -35,32 +30,13 @@ def help_lines(place: str, keys: Mapping[str, str], width: int, ascii_only: bool
     return [[(plain(t), ink) for t, ink in line] for line in lines] if ascii_only else lines
 
 
-class Help(ModalScreen[None]):
-    """Shown over whatever is in front."""
-
-    BINDINGS: ClassVar[list[BindingType]] = [
-        Binding("escape,q,f1,question_mark,enter", "leave", "Close", show=False),
-        Binding("down,j", "scroll_by(1)", "Down", show=False),
-        Binding("up,k", "scroll_by(-1)", "Up", show=False),
-        Binding("pagedown,space", "scroll_by(15)", "Page down", show=False),
-        Binding("pageup", "scroll_by(-15)", "Page up", show=False),
-        Binding("home", "scroll_by(-1000)", "First", show=False),
-        Binding("end", "scroll_by(1000)", "Last", show=False),
-    ]
+class Help(Overlay):
+    """Shown for the place in front."""
 
     def __init__(self, place: str, keys: Mapping[str, str], ascii_only: bool) -> None:
         super().__init__()
         self._place, self._keys, self._ascii = place, keys, ascii_only
 
-    def compose(self) -> ComposeResult:
-        """One view."""
-        yield LineView(lambda width: help_lines(self._place, self._keys, width, self._ascii), id="help")
-
-    def action_scroll_by(self, rows: int) -> None:
-        """Scroll."""
-        view = self.query_one(LineView)
-        view.scroll_to(y=view.scroll_offset.y + rows, animate=False)
-
-    def action_leave(self) -> None:
-        """Close."""
-        self.dismiss(None)
+    def lines(self, width: int) -> Sequence[Line]:
+        """The keys."""
+        return help_lines(self._place, self._keys, width, self._ascii)

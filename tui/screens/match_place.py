@@ -19,6 +19,7 @@ from tui.widgets.paged_table import PagedTable
 
 if TYPE_CHECKING:
     from catalog.callout.reading import Understanding
+    from catalog.cloth import Cloth
     from catalog.crossref import Answer, Request
     from catalog.search.candidate import Candidate
     from tui.widgets.plot import Aim, Spot
@@ -84,6 +85,11 @@ class MatchPlace(Place):
         if self.answer is None or not self.table.rows.total:
             return None
         return self.answer.candidates[self.table.cursor]
+
+    @property
+    def cloth(self) -> "Cloth | None":
+        """The highlighted candidate's cloth."""
+        return self.candidate.cloth if self.candidate else None
 
     def settle(self) -> None:
         """To the line, where there is nothing in the list yet."""

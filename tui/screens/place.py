@@ -14,6 +14,7 @@ from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import Column, PagedTable
 
 if TYPE_CHECKING:
+    from catalog.cloth import Cloth
     from tui.screens.desk import Desk
 
 
@@ -174,6 +175,20 @@ class Place(Vertical):
             self.look_changed()
         if unknown:
             self.desk.say(f"No column is called {unknown[0]}: they are {' '.join(known)}.")
+
+    @property
+    def cloth(self) -> "Cloth | None":
+        """The cloth that the highlighted row is about."""
+        return None
+
+    def action_sums(self) -> None:
+        """The sums behind its figures."""
+        from tui.screens.sums import Sums
+
+        if self.cloth is None:
+            self.desk.say("There is no cloth here to lay out sums for.")
+            return
+        self.app.push_screen(Sums(self.cloth, self.desk.ascii_only))
 
     def action_find(self) -> None:
         """Find a row by a word in it."""

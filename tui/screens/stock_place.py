@@ -186,6 +186,12 @@ class StockPlace(Place):
         left = fit(self.spelled(f" {what} · by {self.sort}"), max(0, width - len(right) - 1))
         return self.spelled_lines([((left + " ", "muted"), (right, "muted"))])
 
+    @property
+    def cloth(self) -> "Cloth | None":
+        """The cloth of the highlighted lot."""
+        rows = self.table.rows
+        return rows.lots[self.table.cursor][1] if isinstance(rows, LotRows) and rows.total else None
+
     def action_sort(self) -> None:
         """The next order."""
         self.sort = SORTS[(SORTS.index(self.sort) + 1) % len(SORTS)]
@@ -199,11 +205,10 @@ class StockPlace(Place):
 
     async def action_lot_cloth(self) -> None:
         """Match the cloth of the highlighted lot."""
-        rows = self.table.rows
-        if isinstance(rows, LotRows) and rows.total:
+        if self.cloth is not None:
             from tui.screens.catalogue_place import callout_of
 
-            await self.desk.go("match", callout_of(rows.lots[self.table.cursor][1]))
+            await self.desk.go("match", callout_of(self.cloth))
 
     def action_open(self) -> None:
         """A lot has nothing more to show than its row: its columns move instead."""

@@ -19,7 +19,8 @@ from tui.widgets.paged_table import Column, PagedTable
 if TYPE_CHECKING:
     from catalog.report.tables import Row, Table
 
-NAMES = ("gauges", "sieves", "alloys", "guards")
+NAMES = ("gauges", "sieves", "alloys", "guards", "equivalents", "lookalikes")
+OVER_STORE = ("equivalents", "lookalikes")
 WIDEST = 34
 MEASURED_ROWS = 200
 
@@ -87,17 +88,48 @@ class TablesPlace(Place):
         self._list()
 
     def store_shut(self, sentence: str) -> None:
-        """Tables need no store."""
+        """Most tables need no store."""
+        self._list()
 
-    def _table(self) -> "Table":
+    def store_opened(self) -> None:
+        """Tables that are made of the store are made afresh."""
+        for name in OVER_STORE:
+            self._tables.pop(name, None)
+        self._list()
+
+    def _table(self) -> "Table | None":
+        """The table in front; None while it is being made of the store."""
         from catalog.report.tables import REFERENCE
 
-        if self.name_of_table not in self._tables:
-            self._tables[self.name_of_table] = REFERENCE[self.name_of_table]()
-        return self._tables[self.name_of_table]
+        name = self.name_of_table
+        if name not in self._tables and name not in OVER_STORE:
+            self._tables[name] = REFERENCE[name]()
+        return self._tables.get(name)
+
+    def _make(self, name: str) -> None:
+        """Have a table made of the store."""
+        words = "Comparing the whole catalogue…" if self.desk.door.is_open else "Opening the store…"
+        self.say_in_list((f"! {self.desk.trouble}", "bad") if self.desk.trouble else (words, "muted"))
+
+        def work(store: Any) -> "Table":
+            from catalog.report.tables import OVER_STORE as MAKERS
+
+            return MAKERS[name](store)
+
+        def got(table: "Table") -> None:
+            self._tables[name] = table
+            if name == self.name_of_table:
+                self._list()
+
+        self.desk.door.ask("table", work, got, lambda sentence: self.say_in_list((f"! {sentence}", "bad")))
 
     def _list(self) -> None:
         table = self._table()
+        self.query_one("#status", LineView).show(self._which_line)
+        self.query_one("#source", LineView).show(self._source_line)
+        if table is None:
+            self._make(self.name_of_table)
+            return
         rows = self._passing(with_inches(table.rows))
         keys = list(dict.fromkeys(key for row in rows[:MEASURED_ROWS] for key in row))
         if rows:
@@ -142,7 +174,8 @@ class TablesPlace(Place):
         return self.spelled_lines([[*pieces, (right.rjust(max(0, width - used)), "muted")]])
 
     def _source_line(self, width: int) -> Sequence[Line]:
-        source = harmless(self._table().source) if self.is_mounted else ""
+        table = self._table() if self.is_mounted else None
+        source = harmless(table.source) if table else ""
         return self.spelled_lines([((fit(f" Source: {source}", width), "muted"),)])
 
     def on_paged_table_moved(self, event: PagedTable.Moved) -> None:
