@@ -64,10 +64,10 @@ class DutchWeave:
 def pieces(weave: DutchWeave) -> list[Piece]:
     """Every straight piece that can matter to points with 0 ≤ x ≤ P, 0 ≤ y ≤ repeat·s."""
     P, s, n = weave.warp_pitch_mm, weave.weft_pitch_mm, weave.repeat
-    far = n + 3 + int(weave.weft_wire_mm / s)
+    far = n // 2 + 1  # a wire half a repeat further along y has a twin that is nearer
     found: list[Piece] = []
     for warp in (-1, 0, 1, 2):
-        ends = (warp * P, -far * s, 0.0), (warp * P, (n + far) * s, 0.0)
+        ends = (warp * P, -n * s, 0.0), (warp * P, 2 * n * s, 0.0)
         found.append(_piece(*ends, weave.warp_wire_mm / 2.0, warp))
     for weft in range(-far, n + far + 1):
         for warp in (-1, 0, 1):
