@@ -1,0 +1,12 @@
+"""Callouts: text to readings, and back to text."""
+
+from catalog.callout.reading import Understanding
+
+__all__ = ["read"]
+
+
+def read(text: str) -> Understanding:
+    """Understand a callout: readings, status, question, problems, words by role. Never raises on a text."""
+    from catalog.callout.reader import read as read_text
+
+    return read_text(text)

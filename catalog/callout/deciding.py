@@ -1,0 +1,218 @@
+"""What becomes of a callout: readings kept and ruled out, the status, one question, what is missing."""
+
+from collections.abc import Sequence
+from dataclasses import dataclass, field, replace
+
+from catalog.callout.combining import Combined, combinations
+from catalog.callout.draft import Draft
+from catalog.callout.feasible import Fault, fault_of
+from catalog.callout.mending import Mended, clash_message, mend_clash, mend_unit
+from catalog.callout.reading import Likelihood, Reading, Side
+from catalog.callout.turning import Turned, senses_of_direction
+from catalog.construction import Weave
+from catalog.physics.geometry import open_area_pct
+
+QUIET_SENSES = ("opening x wire or rectangle",)
+"""Senses that stay possible without a question, since custom is plain."""
+
+
+@dataclass(slots=True)
+class Decided:
+    """The outcome, before the status is put together."""
+
+    readings: list[Reading] = field(default_factory=list)
+    must_ask: bool = False
+    question: str | None = None
+
+
+def decide(draft: Draft) -> Decided:
+    """Generate every reading, rule out what is no cloth, offer repairs where nothing is left."""
+    every = combinations(draft)
+    judged = [(made, fault_of(made, draft.weave, draft.is_dutch)) for made in every]
+    alive = [made for made, fault in judged if fault is None and not made.clashes]
+    best = min((made.rank for made in alive), default=0)
+    alive = [made for made in alive if made.rank == best]
+    if alive:
+        return _survivors(draft, alive, [(m, f) for m, f in judged if f and m.rank == 0 and not m.is_inferred], best)
+    clashing = [made for made, fault in judged if fault is None]
+    return _contradiction(draft, clashing) if clashing else _no_cloth(draft, judged)
+
+
+def _survivors(draft: Draft, alive: list[Combined], ruled_out: list[tuple[Combined, Fault]], rank: int) -> Decided:
+    done = Decided()
+    turned = [one for made in _distinct(alive) for one in senses_of_direction(draft, made)]
+    done.readings = [_reading(draft, t.made, t.label, t.likelihood, weave=t.weave, notes=t.notes) for t in turned]
+    for made, fault in ruled_out:
+        done.readings.append(_ruled_out(draft, made, fault))
+    asked = [
+        t
+        for t in turned
+        if not t.is_quiet
+        and not any(o.sense in QUIET_SENSES for o in t.made.options if o.likelihood is Likelihood.POSSIBLE)
+    ]
+    done.must_ask = len(asked) > 1 or rank > 1
+    if rank > 1 and ruled_out:
+        draft.problem(ruled_out[0][1].code, ruled_out[0][1].message)
+    if done.must_ask:
+        done.question = question(done.readings)
+    return done
+
+
+def _distinct(made: list[Combined]) -> list[Combined]:
+    kept: dict[object, Combined] = {}
+    for one in sorted(made, key=lambda m: m.likelihood is not Likelihood.USUAL):
+        extra = tuple((o.rating, o.alloy, o.form, o.grade, o.missing) for o in one.options)
+        kept.setdefault((_figures(one.warp), _figures(one.weft), extra), one)
+    return list(kept.values())
+
+
+def _figures(side: Side) -> tuple[object, ...]:
+    return tuple(length and length.mm for length in (side.pitch, side.wire, side.aperture))
+
+
+def _ruled_out(draft: Draft, made: Combined, fault: Fault) -> Reading:
+    return _reading(draft, made, made.label or "as written", Likelihood.RULED_OUT, notes=(fault.message,))
+
+
+def _contradiction(draft: Draft, clashing: Sequence[Combined]) -> Decided:
+    """Figures that disagree beyond rounding: every repair is a reading, and the question shows them."""
+    first = clashing[0]
+    draft.problem("E_INCONSISTENT", clash_message(first.clashes[0]))
+    repairs = [m for made in clashing[:4] for m in mend_clash(draft, made)]
+    readings = _mended_readings(draft, repairs, Likelihood.USUAL)
+    if not readings:
+        readings = [
+            _reading(draft, first, "as written", Likelihood.RULED_OUT, notes=(clash_message(first.clashes[0]),))
+        ]
+    return Decided(readings, True, question(readings))
+
+
+def _mended_readings(draft: Draft, repairs: Sequence[Mended], likelihood: Likelihood) -> list[Reading]:
+    seen: dict[object, Reading] = {}
+    for m in repairs:
+        key = (_figures(m.made.warp), _figures(m.made.weft))
+        made = _reading(draft, m.made, m.label, likelihood, notes=m.notes)
+        seen.setdefault(key, replace(made, standard=m.standard or made.standard))
+    return list(seen.values())
+
+
+def _no_cloth(draft: Draft, judged: Sequence[tuple[Combined, Fault | None]]) -> Decided:
+    """Nothing can be woven as written: say why, and offer a slip of the unit, a twill or a Dutch weave that explains it."""
+    made, fault = judged[0]
+    assert fault is not None
+    repairs = [m for one, _ in judged[:4] for m in mend_unit(draft, one)]
+    if repairs:
+        draft.problem("E_UNIT", f"{fault.message.rstrip('.')}; {repairs[0].label}?")
+    else:
+        draft.problem(fault.code, fault.message)
+    readings = _mended_readings(draft, repairs, Likelihood.POSSIBLE)
+    readings += _other_weaves(draft, judged)
+    readings += [_ruled_out(draft, one, f) for one, f in judged[:4] if f is not None and not one.is_inferred]
+    return Decided(readings, True, question(readings))
+
+
+def _other_weaves(draft: Draft, judged: Sequence[tuple[Combined, Fault | None]]) -> list[Reading]:
+    found = []
+    for made, fault in judged[:4]:
+        if fault and fault.twill_only and draft.weave is None and not made.is_inferred:
+            found.append(
+                _reading(draft, made, "2/2 twill, its wires lying paired", Likelihood.POSSIBLE, weave=Weave.TWILLED)
+            )
+        elif fault and fault.code == "E_IMPOSSIBLE" and _packs_like_dutch(made):
+            bare = replace(
+                made, warp=replace(made.warp, aperture=None), weft=replace(made.weft, aperture=None), derived=()
+            )
+            found.append(
+                _reading(draft, bare, "plain Dutch, the word left out", Likelihood.POSSIBLE, weave=Weave.PLAIN_DUTCH)
+            )
+    return found
+
+
+def _packs_like_dutch(made: Combined) -> bool:
+    """Only a Dutch weave packs its weft so that wire and pitch are about one."""
+    warp, weft = made.warp, made.weft
+    if not (warp.pitch and warp.wire and weft.pitch and weft.wire) or warp.pitch.mm <= weft.pitch.mm:
+        return False
+    return warp.wire.mm < warp.pitch.mm and weft.pitch.mm <= weft.wire.mm <= weft.pitch.mm * 14 / 10
+
+
+def question(readings: Sequence[Reading]) -> str | None:
+    """One question with the numbers of the readings that are left."""
+    alive = [r for r in readings if r.likelihood is not Likelihood.RULED_OUT]
+    if len(alive) < 2:
+        return None
+    said = [f"{r.label}{_numbers(r)}" for r in alive[:4]]
+    more = f" (and {len(alive) - 4} more)" if len(alive) > 4 else ""
+    return f"Which is meant: {'; or '.join(said)}{more}?"
+
+
+def _numbers(reading: Reading) -> str:
+    """The figures that tell readings apart: opening and wire, else pitch."""
+    side, other = reading.warp, reading.weft
+    parts: list[str] = []
+    for name, one, two in (
+        ("opening", side.aperture, other.aperture),
+        ("wire", side.wire, other.wire),
+        ("pitch", side.pitch, other.pitch),
+    ):
+        if one and (name != "pitch" or not parts):
+            twice = f" x {float(two.mm):.4g}" if two and two.mm != one.mm else ""
+            parts.append(f"{name} {float(one.mm):.4g}{twice} mm")
+    return f" ({', '.join(parts)})" if parts else ""
+
+
+def _reading(
+    draft: Draft,
+    made: Combined,
+    label: str,
+    likelihood: Likelihood,
+    weave: Weave | None = None,
+    notes: tuple[str, ...] = (),
+) -> Reading:
+    options = made.options
+    weave = weave or draft.weave
+    area, derived = _open_area(draft, made, weave)
+    form = next((o.form for o in options if o.form), None) or draft.form
+    said = dict.fromkeys((*draft.notes, *(n for o in options for n in o.notes if n), *notes))
+    return Reading(
+        label=label or made.label or "as written",
+        likelihood=likelihood,
+        weave=weave,
+        warp=made.warp,
+        weft=made.weft,
+        alloy=draft.alloy or next((o.alloy for o in options if o.alloy), None),
+        finish=", ".join(draft.finish) or None,
+        crimp=draft.crimp,
+        grade=next((o.grade for o in options if o.grade), None) or draft.grade,
+        standard=next((o.standard for o in options if o.standard), None) or (", ".join(draft.standards) or None),
+        certificate=draft.certificate,
+        rating=next((o.rating for o in options if o.rating), None) or draft.rating,
+        open_area_pct=area,
+        mass_kg_m2=_mass(draft),
+        limits=dict(draft.limits),
+        form=form,
+        derived=made.derived + derived,
+        notes=tuple(said),
+    )
+
+
+def _open_area(draft: Draft, made: Combined, weave: Weave | None) -> tuple[float | None, tuple[str, ...]]:
+    warp, weft = made.warp, made.weft
+    whole = warp.pitch and weft.pitch and warp.aperture and weft.aperture
+    if whole and not draft.is_dutch and not (weave and weave.is_filter) and min(warp.aperture.mm, weft.aperture.mm) > 0:  # type: ignore[union-attr]
+        figures = [float(x.mm) for x in (warp.aperture, weft.aperture, warp.pitch, weft.pitch) if x]
+        if figures[0] < figures[2] and figures[1] < figures[3]:
+            return round(open_area_pct(*figures), 4), ("open_area_pct",)
+    stated = draft.open_area
+    return (float(stated.number.value) if stated and stated.number else None), ()
+
+
+def _mass(draft: Draft) -> float | None:
+    from catalog.callout.bounds import figures_of
+
+    return round(float(figures_of(draft.mass, "mass")[0][0]), 6) if draft.mass else None
+
+
+def directions(turned: Turned) -> bool:
+    """True where a reading only turns another."""
+    return turned.is_quiet

@@ -1,0 +1,249 @@
+"""How measured numbers hang together: tolerances, ranges, products, brackets. Each rule returns the items, joined."""
+
+from catalog.callout.items import Item
+from catalog.callout.measures import join, peek, rewrite
+
+SEPARATORS = frozenset(",;|_()[]{}\n")
+SPREADING = ("mm", "um", "in", "thou", "cm", "m", "ft", "%", "gauge", "/in", "/cm")
+
+
+def structured(items: list[Item]) -> list[Item]:
+    """Apply the rules of structure in order."""
+    for rule in (_signed_numbers, _tolerances, _ranges, _products, _brackets, _equations):
+        items = rule(items)
+    return items
+
+
+def is_separator(item: Item | None) -> bool:
+    """True for what ends a clause: a comma, a bracket, a hyphen that stands free."""
+    return item is None or (item.kind == "sign" and (item.text in SEPARATORS or (item.text == "-" and not item.glued)))
+
+
+def is_times(item: Item | None) -> bool:
+    """True for ×, which stands between the numbers of a product; 'by', 'auf', 'par' are the same."""
+    return item is not None and ((item.kind == "word" and item.text in "xX") or item.has("by"))
+
+
+def _signed_numbers(items: list[Item]) -> list[Item]:
+    """A sign glued before a number and free on its left: '-40+60' says what passes and what is held."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        sign, number, before = items[at], peek(items, at + 1), peek(items, at - 1)
+        if sign.text not in "+-" or not number or not number.is_number or not number.glued:
+            return None
+        follows = before is not None and before.is_number and before.bound in ("passing", "held")
+        if (sign.glued and not follows) or (before and before.text == "±"):
+            return None
+        number.bound = "passing" if sign.text == "-" else "held"
+        return join(sign, number, number), at + 2
+
+    return rewrite(items, rule)
+
+
+def _tolerances(items: list[Item]) -> list[Item]:
+    """'0.25 mm ±5%', '.0075 ±.0003', '0.25 +0.02/-0.01 mm': what a figure may be off by; a unit behind serves both."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        number, sign, off = items[at], peek(items, at + 1), peek(items, at + 2)
+        if not number.is_number or not sign:
+            return None
+        if sign.text == "±" and off and off.is_number:
+            return _tolerance(number, off, off), at + 3
+        behind = peek(items, at + 3)
+        if sign.has("slot") and off and off.text == "±" and behind and behind.is_number:
+            _label(number, sign)
+            return _tolerance(number, behind, behind), at + 4
+        minus = peek(items, at + 3) if peek(items, at + 2) and items[at + 2].text == "/" else off
+        if sign.is_number and sign.bound == "held" and minus and minus.is_number and minus.bound == "passing":
+            return _tolerance(number, sign, minus), items.index(minus, at) + 1
+        return None
+
+    return rewrite(items, rule)
+
+
+def _tolerance(number: Item, plus: Item, minus: Item) -> Item:
+    unit = minus.unit or plus.unit
+    if number.unit is None and unit != "%":
+        number.unit = unit
+    for off in (plus, minus):
+        off.unit, off.bound = off.unit or unit, None
+    number.tolerance = (plus, minus)
+    return join(number, minus, number)
+
+
+def _ranges(items: list[Item]) -> list[Item]:
+    """'40-60 mesh', '0.1 to 0.2 mm', '0.5..0.8 mm', 'between 0.5 and 0.8 mm': from the lower to the higher figure."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        if items[at].has("between") and _joined(peek(items, at + 2), ("and", "und", "et", "y", "e", "-", "to", "bis")):
+            return _range(items, at, peek(items, at + 1), peek(items, at + 3), at + 4)
+        low, middle = items[at], peek(items, at + 1)
+        if not low.is_number or middle is None or is_times(peek(items, at - 1)):
+            return None
+        if middle.text == "." and peek(items, at + 2) and items[at + 2].text == ".":
+            return _range(items, at, low, peek(items, at + 3), at + 4)
+        if (
+            middle.has("range")
+            or middle.text == "…"
+            or (middle.text == "-" and (middle.glued or _labelled(items, at + 3)))
+        ):
+            return _range(items, at, low, peek(items, at + 2), at + 3)
+        return None
+
+    return rewrite(items, rule)
+
+
+def _joined(item: Item | None, words: tuple[str, ...]) -> bool:
+    return item is not None and item.text.lower() in words
+
+
+def _labelled(items: list[Item], at: int) -> bool:
+    item = peek(items, at)
+    return item is not None and item.has("slot")
+
+
+def _range(items: list[Item], at: int, low: Item | None, high: Item | None, end: int) -> tuple[Item, int] | None:
+    if not (low and high and low.is_number and high.is_number and low.number and high.number):
+        return None
+    if low.unit not in (None, high.unit) or high.bound or high.unit in ("pieces", "designation"):
+        return None
+    low.unit, low.system = high.unit, high.system
+    if not low.number.value < high.number.value or is_times(peek(items, end)):
+        return None
+    low.upto = high
+    return join(items[at], high, low), end
+
+
+def _products(items: list[Item]) -> list[Item]:
+    """'60 x 60 x .0075', '0.25/0.16', '3 mesh x 10 mesh', '30 by 30': numbers with × or a stroke between.
+
+    A label may stand behind each number, or between × and the number.
+    """
+    out: list[Item] = []
+    at = 0
+    while at < len(items):
+        if not items[at].is_number:
+            out.append(items[at])
+            at += 1
+            continue
+        members, joins, end = _members(items, at)
+        out.append(_chain(members, joins) if joins else items[at])
+        at = end if joins else at + 1
+    return out
+
+
+def _members(items: list[Item], at: int) -> tuple[list[Item], list[str], int]:
+    members, end = [items[at]], at + 1
+    joins: list[str] = []
+    while True:
+        label = items[end] if end < len(items) and items[end].has("slot") else None
+        times = peek(items, end + 1 if label else end)
+        if not (is_times(times) or (times and times.text == "/" and times.kind == "sign")):
+            return members, joins, end
+        behind = end + (2 if label else 1)
+        inner = items[behind] if behind < len(items) and items[behind].has("slot") else None
+        number = peek(items, behind + 1 if inner else behind)
+        if number is None or not number.is_number or number.bound:
+            return members, joins, end
+        _label(members[-1], label)
+        _label(number, inner)
+        members.append(number)
+        joins.append("/" if times and times.text == "/" else "x")
+        end = behind + (2 if inner else 1)
+
+
+def _label(number: Item, label: Item | None) -> None:
+    if label is not None:
+        number.slot = number.slot or label.senses["slot"]
+        join(min(number, label, key=_start), max(number, label, key=_start), number)
+
+
+def _start(item: Item) -> int:
+    return item.start
+
+
+def _chain(members: list[Item], joins: list[str]) -> Item:
+    chain = Item("chain", "", members[0].start, members[-1].end, members[0].glued, members=members, joins=joins)
+    last = members[-1]
+    for member in reversed(members[:-1]):
+        if member.unit is not None or last.unit not in SPREADING or member.slot:
+            break
+        if last.unit in ("gauge", "m", "ft", "/in", "/cm", "%") or not member.is_count_like:
+            if last.unit == "gauge" and not _is_pair_of_gauges(members, member):
+                break
+            member.unit, member.system = last.unit, last.system
+    _spread_right(members)
+    return chain
+
+
+def _is_pair_of_gauges(members: list[Item], member: Item) -> bool:
+    """'16/18 ga' are two gauges; in '10 x 10 x 24g' only the last number is one."""
+    return (
+        len(members) == 2 and member is members[0] and abs(member.start - members[1].start) < 5 and member.is_count_like
+    )
+
+
+def _spread_right(members: list[Item]) -> None:
+    """In '20 mm x 4' and '1/4\" x .047' the unit of the first serves the others, where they are lengths."""
+    first = members[0]
+    if first.is_length and first.unit in ("mm", "um", "in") and all(m.unit is None for m in members[1:]):
+        for member in members[1:]:
+            if member.slot in (None, "wire", "aperture", "pitch"):
+                member.unit = first.unit
+
+
+def _brackets(items: list[Item]) -> list[Item]:
+    """Figures in brackets behind a figure say it again: '.012 in (0.30 mm)', '0.4233 mm (60 per inch, 23.62 per cm)'."""
+    out: list[Item] = []
+    at = 0
+    while at < len(items):
+        said, end = _bracketed(items, at)
+        holder = _holder(out)
+        if said and holder and not any(number.slot for number in said):
+            _restate(holder, said)
+            holder.end = items[end - 1].end
+            if out[-1] is not holder:
+                out[-1].end = holder.end
+            at = end
+        else:
+            out.append(items[at])
+            at += 1
+    return out
+
+
+def _bracketed(items: list[Item], at: int) -> tuple[list[Item], int]:
+    """The numbers between brackets, where there is nothing else between them."""
+    if items[at].text not in ("(", "["):
+        return [], at
+    said, end = [], at + 1
+    while end < len(items) and (items[end].is_number or items[end].text in (",", "/", "=", "~")):
+        if items[end].is_number:
+            said.append(items[end])
+        end += 1
+    closed = end < len(items) and items[end].text in (")", "]")
+    return (said, end + 1) if closed else ([], at)
+
+
+def _holder(out: list[Item]) -> Item | None:
+    if not out:
+        return None
+    return out[-1].members[-1] if out[-1].kind == "chain" else (out[-1] if out[-1].is_number else None)
+
+
+def _restate(holder: Item, said: list[Item]) -> None:
+    holder.restated += said
+
+
+def _equations(items: list[Item]) -> list[Item]:
+    """'.0075 in = 0.19 mm' says one length twice, in two units."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        first, sign, other = items[at], peek(items, at + 1), peek(items, at + 2)
+        if not (first.is_number and sign and sign.text in "=~" and other and other.is_number):
+            return None
+        if not (first.is_length and other.is_length and first.unit != other.unit):
+            return None
+        first.restated.append(other)
+        return join(first, other, first), at + 3
+
+    return rewrite(items, rule)

@@ -1,0 +1,1 @@
+"""The words of the trade, in the languages that stand on drawings: tables, no grammar."""
