@@ -78,22 +78,28 @@ def is_comparable(point: Point, cloth: Cloth) -> bool:
     return cloth.construction.is_filter == point.is_filter
 
 
-def nearness(summands: tuple[Term, ...], cloth: Cloth) -> Nearness:
-    """Place a comparable *cloth*, by the better of the two ways round; ties are not turned."""
-    names = {name for term in summands for name in (term.straight, term.turned)}
-    found_ln = {name: _ln(FIGURES[name](cloth)) for name in names}
-    straight = _sum([(term, found_ln[term.straight]) for term in summands])
-    turned = _sum([(term, found_ln[term.turned]) for term in summands])
-    is_turned = turned < straight
-    missing, squared = turned if is_turned else straight
-    return Nearness(missing, sqrt(squared), is_turned)
+class Yardstick:
+    """Places cloths as seen from one point; what can be known beforehand is."""
+
+    def __init__(self, point: Point) -> None:
+        summands = terms(point)
+        names = sorted({name for term in summands for name in (term.straight, term.turned)})
+        self._getters = [FIGURES[name] for name in names]
+        self._straight = [(term.weight, term.asked_ln, names.index(term.straight)) for term in summands]
+        self._turned = [(term.weight, term.asked_ln, names.index(term.turned)) for term in summands]
+
+    def place(self, cloth: Cloth) -> Nearness:
+        """Place a comparable *cloth*, by the better of the two ways round; ties are not turned."""
+        figures = [getter(cloth) for getter in self._getters]
+        found_ln = [None if figure is None else log(figure) for figure in figures]
+        straight, turned = _sum(self._straight, found_ln), _sum(self._turned, found_ln)
+        is_turned = turned < straight
+        missing, squared = turned if is_turned else straight
+        return Nearness(missing, sqrt(squared), is_turned)
 
 
-def _ln(figure: float | None) -> float | None:
-    return None if figure is None else log(figure)
-
-
-def _sum(pairs: Sequence[tuple[Term, float | None]]) -> tuple[int, float]:
+def _sum(summands: Sequence[tuple[float, float, int]], found_ln: Sequence[float | None]) -> tuple[int, float]:
     """Count of missing figures and d². fsum rounds once, so that mirrored cloths tie exactly."""
-    parts = [term.weight * (term.asked_ln - found) ** 2 for term, found in pairs if found is not None]
+    pairs = [(weight, asked, found_ln[place]) for weight, asked, place in summands]
+    parts = [weight * (asked - found) ** 2 for weight, asked, found in pairs if found is not None]
     return len(pairs) - len(parts), fsum(parts)

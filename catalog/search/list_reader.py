@@ -5,7 +5,7 @@ from collections.abc import Iterable, Mapping, Sequence
 
 from catalog.cloth import Cloth
 from catalog.search.axes import mean_and_skew
-from catalog.search.distance import FIGURES, is_comparable, nearness, terms
+from catalog.search.distance import FIGURES, Yardstick, is_comparable
 from catalog.search.filtering import NO_FILTERS, passes, turned_ranges, within
 from catalog.search.reader import Filters, Point, Range
 from catalog.stock.lots import Lot
@@ -61,8 +61,8 @@ class ListReader:
         return (c for c in self._cloths.values() if passes(c, self._lots.get(c.id, ()), filters))
 
     def _ranked(self, point: Point, cloths: Iterable[Cloth]) -> list[Found]:
-        summands = terms(point)
-        placed = [(c, nearness(summands, c)) for c in cloths if is_comparable(point, c)]
+        yardstick = Yardstick(point)
+        placed = [(c, yardstick.place(c)) for c in cloths if is_comparable(point, c)]
         placed.sort(key=lambda pair: pair[1].order(pair[0].id))
         return [(cloth, near.distance, near.turned) for cloth, near in placed]
 

@@ -1,7 +1,7 @@
 """Filters as conditions of a WHERE clause on cloth `c`: the same as search.filtering.passes says in Python."""
 
 import re
-from collections.abc import Mapping
+from collections.abc import Iterable, Mapping
 from typing import Any
 
 from catalog.construction import Weave
@@ -26,7 +26,7 @@ class Conditions:
         self.values[name] = value
         return f":{name}"
 
-    def one_of(self, column: str, values: frozenset[str]) -> None:
+    def one_of(self, column: str, values: Iterable[str]) -> None:
         """Bound *column* to *values*."""
         self.parts.append(f"{column} IN ({', '.join(self.bind(str(v)) for v in sorted(values))})")
 

@@ -13,7 +13,7 @@ from sqlalchemy import Connection
 
 from catalog.cloth import Cloth
 from catalog.construction import Weave
-from catalog.search.distance import nearness, terms
+from catalog.search.distance import Yardstick
 from catalog.search.reader import Filters, Point
 from catalog.search.window import Bounds, Layout, implied, largest_radius, layout, least_radius, windows
 from catalog.storage.conditions import Conditions, add_filters, add_kinds, weaves_asked
@@ -37,16 +37,35 @@ FIRST_REACH = 0.02
 """How far beyond the nearest possible cloth is looked at first: 1 % in aperture."""
 
 
-def nearest_cloths(connection: Connection, point: Point, k: int, filters: Filters) -> list[Found]:
+class Experience:
+    """How far earlier searches had to look, so that the next begins there. It never changes an answer."""
+
+    def __init__(self) -> None:
+        self._reach: dict[object, float] = {}
+
+    def reach(self, kind: object) -> float | None:
+        """What searches of this *kind* needed lately; None where there was none."""
+        return self._reach.get(kind)
+
+    def learn(self, kind: object, reach: float) -> None:
+        """Keep a running (geometric) mean."""
+        self._reach[kind] = reach**0.3 * self._reach.get(kind, reach) ** 0.7
+
+
+def nearest_cloths(
+    connection: Connection, point: Point, k: int, filters: Filters, experience: Experience
+) -> list[Found]:
     """The *k* nearest inside *filters*; those without a rating that is asked for come last."""
     if not point.is_filter or point.rating_um is None:
-        return _nearest(connection, point, k, filters)
-    rated = _nearest(connection, point, k, filters, "c.ln_rating IS NOT NULL")
+        return _nearest(connection, point, k, filters, experience)
+    rated = _nearest(connection, point, k, filters, experience, "c.ln_rating IS NOT NULL")
     unrated = replace(point, rating_um=None)
-    return rated + _nearest(connection, unrated, k - len(rated), filters, "c.ln_rating IS NULL")
+    return rated + _nearest(connection, unrated, k - len(rated), filters, experience, "c.ln_rating IS NULL")
 
 
-def _nearest(connection: Connection, point: Point, k: int, filters: Filters, only: str = "") -> list[Found]:
+def _nearest(
+    connection: Connection, point: Point, k: int, filters: Filters, experience: Experience, only: str = ""
+) -> list[Found]:
     weaves = weaves_asked(filters, point.is_filter)
     if k <= 0 or not weaves:
         return []
@@ -55,14 +74,14 @@ def _nearest(connection: Connection, point: Point, k: int, filters: Filters, onl
     add_filters(conditions, filters, weaves)
     kinds = Conditions()
     add_kinds(kinds, filters, weaves)
-    ids = Search(connection, point, conditions, kinds, k).run(layout(point), weaves, filters)
+    ids = Search(connection, point, conditions, kinds, k, experience).run(layout(point), weaves, filters)
     return ranked(point, cloths_by_id(connection, ids))[:k]
 
 
 def ranked(point: Point, cloths: Iterable[Cloth]) -> list[Found]:
     """Comparable *cloths* in order, each with its distance and whether it lies turned."""
-    summands = terms(point)
-    placed = [(cloth, nearness(summands, cloth)) for cloth in cloths]
+    yardstick = Yardstick(point)
+    placed = [(cloth, yardstick.place(cloth)) for cloth in cloths]
     placed.sort(key=lambda pair: pair[1].order(pair[0].id))
     return [(cloth, near.distance, near.turned) for cloth, near in placed]
 
@@ -77,18 +96,27 @@ class Search:
     kinds: Conditions
     """The weaves and alloys alone, which are read past without looking at a row."""
     k: int
+    experience: Experience
 
     def run(self, plan: Layout | None, weaves: frozenset[Weave], filters: Filters) -> list[str]:
         """Ids of the *k* nearest and of whoever lies as far as the last of them, in no order."""
-        if plan is None or self._rows(EVERYTHING, MANY) < MANY:
+        if plan is None:
+            return self._cut(EVERYTHING, self._near(EVERYTHING))
+        kind = (plan.lead.column, plan.wire is None, weaves, filters.alloys, tuple(filters.ranges.items()))
+        reach = self.experience.reach(kind)
+        if reach is None and self._rows(EVERYTHING, MANY) < MANY:
             return self._cut(EVERYTHING, self._near(EVERYTHING))
         bounds = edges(self.connection, plan, weaves, filters.alloys).meet(implied(filters, plan))
-        return [] if bounds.is_empty else self._grow(plan, bounds)
+        if bounds.is_empty:
+            return []
+        ids, needed = self._grow(plan, bounds, reach or FIRST_REACH)
+        self.experience.learn(kind, max(needed, FIRST_REACH / 4))
+        return ids
 
-    def _grow(self, plan: Layout, bounds: Bounds) -> list[str]:
-        """Widen until the k-th nearest is inside for certain, or everything is."""
+    def _grow(self, plan: Layout, bounds: Bounds, first: float) -> tuple[list[str], float]:
+        """Widen until the k-th nearest is inside for certain, or everything is; and the reach that took."""
         nearest, furthest = least_radius(plan, bounds), largest_radius(plan, bounds)
-        reach, safe, enough, budget = FIRST_REACH, 0.0, inf, MANY
+        reach, safe, enough, budget = first, 0.0, inf, MANY
         while True:
             radius = min(hypot(nearest, reach), enough, furthest)
             cut = windows(plan, bounds, radius)
@@ -99,7 +127,8 @@ class Search:
             near = self._near(read)
             inside = sum(1 for _, squared in near if squared <= radius**2)
             if inside >= self.k or radius >= min(enough, furthest):
-                return self._cut(read, near)
+                last = near[self.k - 1][1] if len(near) >= self.k else radius**2
+                return self._cut(read, near), 1.05 * sqrt(max(last - nearest**2, 0.0))
             if len(near) >= self.k:
                 enough = sqrt(near[self.k - 1][1] + HAIR)
             safe, reach = reach, reach * _growth(self.k, inside, bool(near))

@@ -4,7 +4,7 @@ from collections.abc import Iterable, Mapping, Sequence
 from itertools import islice
 from typing import Any
 
-from sqlalchemy import Connection, bindparam, text
+from sqlalchemy import Connection, text
 
 from catalog.cloth import Cloth
 from catalog.search.reader import Filters
@@ -59,13 +59,13 @@ def count_cloths(connection: Connection, filters: Filters) -> int:
 
 def cloths_by_id(connection: Connection, ids: Iterable[str]) -> list[Cloth]:
     """The cloths with these ids, in no order."""
-    rows = _by_ids(connection, f"{CLOTHS} WHERE c.id IN :ids", ids)
+    rows = _by_ids(connection, f"{CLOTHS} WHERE c.id", ids)
     return [cloth_of_row(row) for row in rows]
 
 
 def lots_of_cloths(connection: Connection, ids: Iterable[str]) -> Mapping[str, Sequence[Lot]]:
     """The lots that have any length left, by cloth; by location then id."""
-    rows = _by_ids(connection, f"{LOTS} WHERE cloth IN :ids AND length_mm > 0", ids)
+    rows = _by_ids(connection, f"{LOTS} WHERE length_mm > 0 AND cloth", ids)
     found: dict[str, list[Lot]] = {}
     for lot in sorted(map(lot_of_row, rows), key=lambda lot: (lot.location, lot.id)):
         found.setdefault(lot.cloth, []).append(lot)
@@ -73,9 +73,12 @@ def lots_of_cloths(connection: Connection, ids: Iterable[str]) -> Mapping[str, S
 
 
 def _by_ids(connection: Connection, sql: str, ids: Iterable[str]) -> list[Sequence[Any]]:
-    statement = text(sql).bindparams(bindparam("ids", expanding=True))
+    """Rows of the statement *sql*, which ends in the column of the ids."""
     rows: list[Sequence[Any]] = []
     left = iter(dict.fromkeys(ids))
     while batch := list(islice(left, BATCH)):
-        rows.extend(connection.execute(statement, {"ids": batch}).all())
+        conditions = Conditions()
+        conditions.one_of(sql, batch)
+        found = connection.exec_driver_sql(conditions.driver_sql(connection.dialect.paramstyle), conditions.values)
+        rows.extend(found.cursor.fetchall())
     return rows

@@ -25,6 +25,7 @@ class Store:
 
     def __init__(self, engine: Engine, location: str, is_writable: bool) -> None:
         self._engine = engine
+        self._experience = nearest.Experience()
         self.location = location
         """Path or URL, as the person would write it."""
         self.is_writable = is_writable
@@ -44,7 +45,7 @@ class Store:
     def nearest(self, point: Point, k: int, filters: Filters = NO_FILTERS) -> Sequence[Found]:
         """Return the *k* nearest as (cloth, distance, turned); see search.distance for the order."""
         with self.reading() as connection:
-            return nearest.nearest_cloths(connection, point, k, filters)
+            return nearest.nearest_cloths(connection, point, k, filters, self._experience)
 
     def box(self, point: Point, ranges: Mapping[str, Range], filters: Filters = NO_FILTERS) -> Sequence[Found]:
         """Return every comparable cloth inside *ranges*, either way round, in the order of nearest."""

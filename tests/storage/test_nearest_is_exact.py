@@ -215,7 +215,7 @@ def test_the_search_reads_along_an_index(both: tuple[Store, ListReader], kind: s
         raw = connection.connection.driver_connection
         assert raw is not None
         raw.set_trace_callback(said.append)
-        nearest.nearest_cloths(connection, POINTS[kind], 50, filters)
+        nearest.nearest_cloths(connection, POINTS[kind], 50, filters, nearest.Experience())
         raw.set_trace_callback(None)
         searches = [sql for sql in said if " AS d2 " in sql]
         plans = [row[3] for sql in searches for row in connection.exec_driver_sql(f"EXPLAIN QUERY PLAN {sql}")]
