@@ -75,8 +75,10 @@ class Door:
             super().__init__()
             self.sentence = sentence
 
-    def __init__(self, opener: Callable[[], OpenStore], screen: MessagePump) -> None:
-        self._opener, self._screen = opener, screen
+    def __init__(
+        self, opener: Callable[[], OpenStore], screen: MessagePump, warm_up: Callable[[], object] | None = None
+    ) -> None:
+        self._opener, self._screen, self._warm_up = opener, screen, warm_up
         self._waiting: OrderedDict[str, Ticket] = OrderedDict()
         self._newest: dict[str, int] = {}
         self._numbers = 0
@@ -116,6 +118,12 @@ class Door:
         if callable(interrupt):
             interrupt()
 
+    def drop(self, kind: str) -> None:
+        """No answer of this kind is wanted any more: the question has been withdrawn."""
+        with self._signal:
+            self._waiting.pop(kind, None)
+            self._newest.pop(kind, None)
+
     def take(self, came: "Door.Came") -> None:
         """Hand an answer on, unless a newer question has been asked since."""
         ticket = came.ticket
@@ -145,6 +153,8 @@ class Door:
             return
         self.is_open = True
         self._screen.post_message(self.Opened(self._store.has_demo))
+        if not self._waiting and self._warm_up is not None:
+            self._warm_up()
         while (ticket := self._next()) is not None:
             self._answer(ticket)
         self._store.close()

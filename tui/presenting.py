@@ -1,5 +1,6 @@
 """Figures and words on their way to a screen: harmless text, exact widths, units, verdicts by word and symbol."""
 
+import re
 import unicodedata
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
@@ -18,6 +19,15 @@ FINE_INCH = 0.001
 MARKS_KEPT = 2
 VARIATIONS = frozenset(map(chr, (*range(0xFE00, 0xFE10), *range(0xE0100, 0xE01F0))))
 UNITS = ("both", "inch", "metric")
+
+SHORTER = (
+    (r"^([\d.]+) [x×] \1 mesh,? ", r"\1 mesh "),
+    (r"^Filter cloth ", ""),
+    (r"^Test-sieve cloth ", "sieve "),
+    (r" (in|mm), ", " "),
+    (r", ", " "),
+)
+"""What of a name is left out where there is little room, in this order."""
 
 PLAIN: Mapping[int, str] = str.maketrans(
     {
@@ -54,6 +64,15 @@ def _few_marks(text: str) -> str:
         elif run <= MARKS_KEPT and not (is_mark and (not kept or char in VARIATIONS)):
             kept.append(char)
     return "".join(kept)
+
+
+def shortened(name: str, width: int) -> str:
+    """A cloth's name in *width* cells: what goes without saying goes first, then the end."""
+    for pattern, shorter in SHORTER:
+        if width_of(name) <= width:
+            return name
+        name = re.sub(pattern, shorter, name)
+    return name
 
 
 def plain(text: str) -> str:

@@ -190,6 +190,7 @@ async def _(d: Driver, key: str) -> None:
 async def _(d: Driver, key: str) -> None:
     await d.press(key)
     assert d.desk.place.has_class("-opened")
+    await d.press("pagedown")
     assert "why" in d.text
     await d.press("escape")
     assert not d.desk.place.has_class("-opened")
@@ -325,8 +326,9 @@ async def _(d: Driver, key: str) -> None:
 @proof("answer")
 async def _(d: Driver, key: str) -> None:
     await d.press("slash")
-    d.desk.place.line.value = "60 mesh 304"  # type: ignore[union-attr]
+    d.desk.place.line.value = "60"  # type: ignore[union-attr]
     await d.settle()
+    assert "2 sieve No. 60" in d.text
     alive = d.desk.place.understanding.surviving  # type: ignore[attr-defined]
     assert len(alive) > 1
     await d.press("escape", key)

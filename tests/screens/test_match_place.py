@@ -261,3 +261,35 @@ async def test_the_screen_follows_a_smaller_window() -> None:
 async def test_a_caution_is_said_where_the_callout_names_the_use() -> None:
     async with browser(callout=f"{ASKED} dairy") as d:
         assert "! Food or pharmaceutical contact" in d.text
+
+
+async def test_an_answer_to_a_question_that_was_withdrawn_is_dropped() -> None:
+    gate = threading.Event()
+
+    class Slow(SmallStore):
+        def nearest(self, *rest: object) -> object:  # type: ignore[override]
+            gate.wait(10)
+            return super().nearest(*rest)  # type: ignore[arg-type]
+
+    async with browser(callout="", opener=Slow) as d:
+        d.desk.place.line.value = ASKED  # type: ignore[union-attr]
+        await d.pilot.pause()
+        d.desk.place.line.value = "zzyx"  # type: ignore[union-attr]
+        await d.pilot.pause()
+        gate.set()
+        await d.settle()
+        await d.pilot.pause(0.05)
+        assert "Nothing can be matched yet." in d.text
+        assert d.desk.place.table.rows.total == 0
+
+
+async def test_several_readings_are_answered_with_one_key() -> None:
+    async with browser(callout="60") as d:
+        assert "1 60 per inch" in d.text
+        assert "2 sieve No. 60" in d.text
+        await d.press("2")
+        assert ">2 sieve No. 60" in d.text
+        assert (
+            "same            0.25/0.16 1.4301" in d.text.replace("cannot say", "")
+            or "0.25/0.16 1.4301" in d.highlighted
+        )

@@ -55,7 +55,7 @@ class CataloguePlace(Place):
         yield LineView(self._status_line, id="status", classes="status")
         with Container(id="lower"):
             yield PagedTable(id="candidates", sign=self.spelled("›"))
-            yield LineView(self._detail_lines, id="detail")
+            yield LineView(self._detail_lines, id="detail", has_band=True)
 
     def on_mount(self) -> None:
         """Ask, where the store is open already."""
@@ -255,7 +255,7 @@ class CataloguePlace(Place):
         return words
 
     def _detail_lines(self, width: int) -> Sequence[Line]:
-        from tui.widgets.cloth_lines import FIGURES_WIDTH, figure_lines, lot_lines, sheet_lines
+        from tui.widgets.cloth_lines import FIGURES_WIDTH, cloth_heading, figure_lines, lot_lines, sheet_lines
         from tui.widgets.detail_lines import beside
 
         cloth = self.cloth if self.is_mounted else None
@@ -269,7 +269,7 @@ class CataloguePlace(Place):
             return self.spelled_lines(figure_lines(cloth, units, width))
         left = figure_lines(cloth, units, FIGURES_WIDTH)
         right = lot_lines(lots or (), width - FIGURES_WIDTH - 2, units)
-        return self.spelled_lines(beside(left, right, FIGURES_WIDTH))
+        return self.spelled_lines([cloth_heading(cloth), *beside(left, right, FIGURES_WIDTH)])
 
     def _narrow(self) -> None:
         self._count()

@@ -25,6 +25,14 @@ TITLES: Mapping[str, str] = {
 }  # fmt: skip
 
 
+def warm_up() -> None:
+    """Load what the first key would otherwise wait for: the tables behind the reading of callouts."""
+    import catalog.crossref  # noqa: F401  its import is what takes the time
+    from catalog import callout
+
+    callout.read("60 x 60 mesh, .0065 in, 304")
+
+
 def _make(place: str) -> Place:
     """A place by its name; each is loaded when it is first gone to."""
     if place == "catalogue":
@@ -59,7 +67,7 @@ class Desk(Screen[None]):
         directory: Path | None,
     ) -> None:
         super().__init__(id="desk")
-        self.door = Door(opener, self)
+        self.door = Door(opener, self, warm_up)
         self.memory, self.units, self.ascii_only = memory, units, ascii_only
         self.own_keys, self.directory = keys, directory
         self.finding = ""

@@ -61,7 +61,7 @@ class MatchPlace(Place):
         yield LineView(self._status_line, id="status", classes="status")
         with Container(id="lower"):
             yield PagedTable(id="candidates", sign=self.spelled("›"))
-            yield LineView(self._detail_lines, id="detail")
+            yield LineView(self._detail_lines, id="detail", has_band=True)
 
     def on_mount(self) -> None:
         """Read what was typed last time; the store is asked when it is open."""
@@ -135,9 +135,9 @@ class MatchPlace(Place):
         if understanding is None:
             return
         if not understanding.text.strip():
-            self._nothing(("Type a callout above: the nearest cloths are listed here as you type.", "muted"))
+            self._withdraw(("Type a callout above: the nearest cloths are listed here as you type.", "muted"))
         elif not understanding.surviving:
-            self._nothing(
+            self._withdraw(
                 ("Nothing can be matched yet.", "bad"),
                 ("See above what is missing or wrong, and change the line.", "muted"),
             )
@@ -221,6 +221,11 @@ class MatchPlace(Place):
         self.table.show(columns, rows, cursor)
         self._redraw()
 
+    def _withdraw(self, *lines: tuple[str, str]) -> None:
+        """Nothing is asked now: an answer that is still on its way would be to another question."""
+        self.desk.door.drop("match")
+        self._nothing(*lines)
+
     def _failed(self, sentence: str) -> None:
         self._nothing((f"! {sentence}", "bad"), ("Change the line or the limits; F7 asks again.", "muted"))
 
@@ -281,9 +286,10 @@ class MatchPlace(Place):
             return [((" ", "text"),)]
         # the line to type in begins behind its label
         label = 9
-        lines = reading_lines(self.understanding, width, self.desk.units, self.input.text_offset - label, self.taken)
-        if self.answer is not None:
-            lines += [((fit(f"! {harmless(said)}", width), "warn"),) for said in self.answer.cautions]
+        cautions = self.answer.cautions if self.answer is not None else ()
+        lines = reading_lines(
+            self.understanding, width, self.desk.units, self.input.text_offset - label, self.taken, cautions
+        )
         return self.spelled_lines(lines)
 
     def _status_line(self, width: int) -> Sequence[Line]:

@@ -9,7 +9,7 @@ from textual.containers import Horizontal
 from textual.widgets import Input
 
 from tui.commands import STOCK
-from tui.presenting import Line, Piece, fit, harmless, significant
+from tui.presenting import Line, Piece, fit, harmless, shortened, significant
 from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.callout_input import LineInput
@@ -60,7 +60,7 @@ class LotRows:
         width = lot.usable_width_mm / per_width
         return {
             "location": harmless(lot.location, 20),
-            "name": harmless(cloth.name, 60),
+            "name": shortened(harmless(cloth.name, 60), 22),
             "demo": ("D", "warn") if lot.demo else "",
             "width": f"{width:.1f}" if self._inch else f"{width:.0f}",
             "length": f"{lot.free_length_mm / per_length:.2f}",

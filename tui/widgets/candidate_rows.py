@@ -3,7 +3,7 @@
 from collections.abc import Sequence
 
 from catalog.search.candidate import Candidate
-from tui.presenting import SEALS, Piece, harmless, inch, mm, number, signed, significant
+from tui.presenting import SEALS, Piece, harmless, inch, mm, number, shortened, signed, significant
 from tui.widgets.paged_table import Column
 
 FIXED_WIDTH = 42
@@ -52,7 +52,8 @@ class CandidateRows:
             seal = SEALS[candidate.verdict]
             return f"{seal.ascii_symbol if self._ascii else seal.symbol} {seal.word}", seal.ink
         if key == "name":
-            return harmless(candidate.cloth.name, 80)
+            width = next(c.width for c in self.columns if c.key == "name")
+            return shortened(harmless(candidate.cloth.name, 80), width)
         if key == "demo":
             return ("D", "warn") if candidate.cloth.demo else ""
         if key == "rack":

@@ -15,6 +15,7 @@ from tui.presenting import (
     mass,
     mm,
     number,
+    shortened,
     significant,
     wrapped,
 )
@@ -35,7 +36,7 @@ def cloth_columns(units: str) -> tuple[Column, ...]:
         if units != "inch":
             columns.append(Column(f"{key}-mm", f"{key} mm", 9))
         if units != "metric":
-            columns.append(Column(f"{key}-in", "in" if units == "both" else f"{key} in", 8))
+            columns.append(Column(f"{key}-in", "in" if units == "both" else f"{key} in", 8 if key == "apert" else 11))
     columns += [
         Column("open", "open %", 6),
         Column("mass", "kg/m²", 6),
@@ -51,13 +52,15 @@ def cloth_columns(units: str) -> tuple[Column, ...]:
 
 def cloth_cells(cloth: Cloth, columns: Sequence[Column]) -> list[str | Piece]:
     """A cloth's cells by the columns' keys."""
-    return [_cell(cloth, column.key) for column in columns]
+    return [_cell(cloth, column.key, column.width) for column in columns]
 
 
-def _cell(cloth: Cloth, key: str) -> str | Piece:
+def _cell(cloth: Cloth, key: str, width: int) -> str | Piece:
     made, figures = cloth.construction, cloth.figures
-    if key in ("name", "source"):
-        return harmless(getattr(cloth, key), 80)
+    if key == "name":
+        return shortened(harmless(cloth.name, 80), width)
+    if key == "source":
+        return harmless(cloth.source, 200)
     if key == "demo":
         return ("D", "warn") if cloth.demo else ""
     what, _, unit = key.partition("-")
@@ -87,6 +90,12 @@ def _pair(values: Sequence[float | None], unit: str) -> str:
 def _counts(cloth: Cloth) -> str:
     warp, weft = (float(s.count_per_in) for s in (cloth.construction.warp, cloth.construction.weft))
     return significant(warp) if warp == weft else f"{significant(warp)} × {significant(weft)}"
+
+
+def cloth_heading(cloth: Cloth) -> Line:
+    """The name, and that a cloth is of the demo."""
+    head: list[Piece] = [(harmless(cloth.name, 80), "strong")]
+    return [*head, ("  ", "text"), (" demo ", "demo")] if cloth.demo else head
 
 
 def figure_lines(cloth: Cloth, units: str, width: int) -> Lines:
@@ -135,10 +144,7 @@ def sheet_lines(
     cloth: Cloth, lots: Sequence[Lot] | None, width: int, height: int, units: str, ascii_only: bool
 ) -> Lines:
     """The data sheet: name, figures, lots, drawing."""
-    head: list[Piece] = [(harmless(cloth.name, 80), "strong")]
-    if cloth.demo:
-        head += [("  ", "text"), (" demo ", "demo")]
-    lines: Lines = [head]
+    lines: Lines = [cloth_heading(cloth)]
     lines += figure_lines(cloth, units, width)
     lines.append(())
     lines += lot_lines(lots, width, units) if lots is not None else [(("Looking for lots…", "muted"),)]

@@ -5,7 +5,7 @@ from itertools import zip_longest
 from typing import TYPE_CHECKING
 
 from catalog.search.candidate import Candidate
-from tui.presenting import Piece, fit, harmless, significant, wrapped
+from tui.presenting import Piece, fit, harmless, shortened, significant, wrapped
 from tui.widgets.detail_lines import Lines, figure_rows, sealed
 
 if TYPE_CHECKING:
@@ -20,7 +20,7 @@ def compare_lines(answer: "Answer", candidates: Sequence[Candidate], width: int,
     column = max(12, (width - LABEL - ASKED - 2) // max(1, len(candidates)) - 1)
     asked = min(ASKED + 8, column) if column > ASKED + 8 else ASKED
     widths = (LABEL, asked, *[column] * len(candidates))
-    names = [f"{harmless(c.cloth.name, 60)}{' demo' if c.cloth.demo else ''}" for c in candidates]
+    names = [f"{shortened(harmless(c.cloth.name, 60), column)}{' demo' if c.cloth.demo else ''}" for c in candidates]
     lines = _block([("", "muted"), ("asked", "head"), *((name, "strong") for name in names)], widths)
     verdicts = [sealed(c.verdict, ascii_only) for c in candidates]
     lines += [*_block([("verdict", "muted"), ("", "text"), *verdicts], widths), ()]

@@ -35,7 +35,7 @@ VIEWS = ("figures", "reasons", "stock", "drawing")
 SIDE_BY_SIDE_FROM = 76
 FIGURES_WIDTH = 50
 ROOM_FOR_UNITS = 22
-DRAWING_ROWS = (12, 24)
+DRAWING_ROWS = (10, 24)
 LOT_WORDS = {"roll": "roll", "remnant": "remnant", "panel": "panel", "disc": "disc"}
 
 
@@ -69,16 +69,14 @@ def heading(candidate: Candidate, ascii_only: bool = False) -> Line:
     ]
     if candidate.cloth.demo:
         pieces += [("  ", "text"), (" demo ", "demo")]
-    if candidate.harm_side:
-        pieces.append(("  harm side: measure the roll", "risk"))
     return pieces
 
 
 def purpose_line(candidate: Candidate, ascii_only: bool) -> Lines:
-    """What each purpose says, where they don't say the same."""
+    """What each purpose says, where they don't say the same; and that the aperture lies to the harm side."""
+    pieces: list[Piece] = [("harm side: measure the roll   ", "risk")] if candidate.harm_side else []
     if len(set(candidate.by_purpose.values())) < 2:
-        return []
-    pieces: list[Piece] = []
+        return [pieces] if pieces else []
     for name, verdict in candidate.by_purpose.items():
         pieces += [(f"for {name} ", "muted"), sealed(verdict, ascii_only), ("   ", "text")]
     return [pieces]

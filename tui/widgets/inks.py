@@ -46,6 +46,7 @@ def _coloured(table: Mapping[str, str]) -> dict[str, Style]:
     found = {name: Style(color=colour, bold=name in BOLD or None) for name, colour in table.items()}
     found["cursor"] = Style(bgcolor=table["cursor"], bold=True)
     found["cursor-away"] = Style(bgcolor=table["panel"])
+    found["band"] = Style(bgcolor=table["panel"])
     found["key"] = Style(color=table["head"], bold=True)
     found["here"] = Style(color=table["paper"], bgcolor=table["head"], bold=True)
     found["demo"] = Style(color=table["paper"], bgcolor=table["warn"], bold=True)
@@ -55,7 +56,12 @@ def _coloured(table: Mapping[str, str]) -> dict[str, Style]:
 
 def _bare() -> dict[str, Style]:
     found = {name: Style(bold=name in BOLD or None) for name in DARK}
-    found |= {"cursor": Style(reverse=True), "cursor-away": Style(underline=True), "key": Style(bold=True)}
+    found |= {
+        "cursor": Style(reverse=True),
+        "cursor-away": Style(underline=True),
+        "band": Style(underline=True),
+        "key": Style(bold=True),
+    }
     found |= {"here": Style(reverse=True), "demo": Style(reverse=True), "title": Style(bold=True, underline=True)}
     return found
 

@@ -26,8 +26,16 @@ class Inked(ScrollView, inherit_bindings=False):
 class LineView(Inked, can_focus=False, inherit_bindings=False):
     """Shows what a composer makes of the width; composed again when the width changes."""
 
-    def __init__(self, composer: Composer | None = None, *, id: str | None = None, classes: str = "") -> None:  # noqa: A002
+    def __init__(
+        self,
+        composer: Composer | None = None,
+        *,
+        id: str | None = None,  # noqa: A002
+        classes: str = "",
+        has_band: bool = False,
+    ) -> None:
         super().__init__(id=id, classes=classes)
+        self._has_band = has_band
         self._composer: Composer = composer or (lambda width: ())
         self._lines: Sequence[Line] = ()
         self._width = 0
@@ -80,4 +88,5 @@ class LineView(Inked, can_focus=False, inherit_bindings=False):
         """One line of what is shown."""
         row = y + self.scroll_offset.y
         line: Line = self._lines[row] if row < len(self._lines) else ()
-        return strip_of(line, self.size.width, self.inks)
+        under = self.inks["band"] if self._has_band and row == 0 and self._lines else None
+        return strip_of(line, self.size.width, self.inks, under)

@@ -10,6 +10,7 @@ from tui.presenting import (
     alloy_words,
     both,
     figure_words,
+    fit,
     harmless,
     role_words,
     significant,
@@ -18,6 +19,9 @@ from tui.presenting import (
 )
 
 EMPTY_HINT = "Type what the drawing says:  60 x 60 mesh, .0075 wire, 304   or   0,25/0,16 1.4404 plain"
+SAID_BY_THEMSELVES = ("mesh", "aperture", "wire", "open_area", "pitch")
+"""Parts that a word can name itself: 'opening' needs no label."""
+LABEL_ROOM = 34
 LIMIT_NAMES = {
     "aperture_mm": "aperture", "wire_mm": "wire", "pitch_mm": "pitch", "count_per_in": "count per inch",
     "open_area_pct": "open area", "mass_kg_m2": "mass per area",
@@ -25,7 +29,12 @@ LIMIT_NAMES = {
 
 
 def reading_lines(
-    understanding: Understanding, width: int, units: str, offset: int = 0, taken: int | None = None
+    understanding: Understanding,
+    width: int,
+    units: str,
+    offset: int = 0,
+    taken: int | None = None,
+    cautions: Sequence[str] = (),
 ) -> list[Line]:
     """What is shown beneath the line to type in. *offset*: cells that the typed text has moved left."""
     if not understanding.text.strip():
@@ -34,13 +43,14 @@ def reading_lines(
     if carets := _carets(understanding, width, offset):
         lines.append(carets)
     lines += _problems(understanding, width)
+    lines += [((fit(f"! {harmless(said)}", width), "warn"),) for said in cautions]
     if words := _words(understanding, width):
         lines.append(words)
     alive = understanding.surviving
-    if alive and (taken is not None or not understanding.question):
-        lines += _reading(alive[min(taken or 0, len(alive) - 1)], width, units)
     if understanding.question:
         lines += question_lines(understanding, width, units, taken)
+    if alive and (taken is not None or not understanding.question or len(alive) == 1):
+        lines += _reading(alive[min(taken or 0, len(alive) - 1)], width, units)
     if understanding.missing:
         lines.append((("Missing: ", "ask"), (harmless(", ".join(understanding.missing)), "text")))
     return lines
@@ -82,13 +92,15 @@ def _words(understanding: Understanding, width: int) -> Line:
     for word in understanding.words:
         text = harmless(understanding.text[word.start : word.end], 40)
         label, ink = role_words(word.role)
+        if word.role in SAID_BY_THEMSELVES and not any(char.isdigit() for char in text):
+            label = ""
         cells = width_of(text) + width_of(label) + 1 + (3 if pieces else 0)
         if used + cells > width:
             pieces.append((" …", "muted"))
             break
         if pieces:
             pieces.append(("   ", "muted"))
-        pieces += [(f"{label} ", "muted"), (text, ink)]
+        pieces += [(f"{label} " if label else "", "muted"), (text, ink)]
         used += cells
     return pieces
 
@@ -180,14 +192,24 @@ def limit_words(limits: Limits, units: str) -> list[str]:
 
 def question_lines(understanding: Understanding, width: int, units: str, taken: int | None) -> list[Line]:
     """The question, and each answer behind its key."""
-    lines: list[Line] = [
-        ((part, "ask"),) for part in wrapped(f"? {harmless(understanding.question or '')}", width, 2)[:2]
-    ]
+    question = harmless(understanding.question or "")
     alive: Sequence[Reading] = understanding.surviving
     if len(alive) < 2:
-        return lines
+        return [((part, "ask"),) for part in wrapped(f"? {question}", width, 2)[:2]]
+    asked = question.partition(":")[0]
+    lines: list[Line] = [((fit(f"? {asked}: answer with its number, outside the line.", width).rstrip(), "ask"),)]
     for number, reading in enumerate(alive[:9], 1):
         sign = ">" if taken == number - 1 else " "
-        words = f"{harmless(reading.label, 40)}: {reading_words(reading, units)}"
-        lines.append(((f"{sign}{number} ", "key"), (wrapped(words, width - 3)[0], "text")))
+        label = fit(harmless(reading.label, 60), min(LABEL_ROOM, max(width_of(r.label) for r in alive)))
+        words = fit(f"{label}  {answer_words(reading, units)}", width - 3).rstrip()
+        lines.append(((f"{sign}{number} ", "key"), (words, "strong" if sign == ">" else "text")))
     return lines
+
+
+def answer_words(reading: Reading, units: str) -> str:
+    """What sets a reading apart, in few words: 'opens 0.6147 mm .0242 in, wire 0.6553 mm .0258 in'."""
+    parts = []
+    for name, length in (("opens", reading.warp.aperture), ("wire", reading.warp.wire)):
+        if length is not None:
+            parts.append(f"{name} {both(float(length.mm), units).replace('(', '').replace(')', '')}")
+    return ", ".join(parts) or reading_words(reading, units)
