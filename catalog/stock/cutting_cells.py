@@ -1,0 +1,101 @@
+"""A layout as a tree of straight cuts: every cut runs from edge to edge of the part it divides.
+
+Sizes are whole micrometres *with one kerf added to both sides* of every part and of the cloth itself: a row of n
+pieces of size a with kerf k between them takes n(a + k) − k, so n(a + k) of a width of W + k. Parts then lie side by
+side without gaps, and a last piece that just fits needs no cut beside it.
+"""
+
+from collections.abc import Iterator
+from dataclasses import dataclass, field
+from typing import TypeAlias
+
+
+@dataclass(frozen=True, slots=True)
+class Grid:
+    """*columns* × *rows* equal pieces (or the squares of discs) filling a part without rest."""
+
+    kind: int
+    width: int
+    length: int
+    columns: int
+    rows: int
+    is_turned: bool = False
+
+    @property
+    def count(self) -> int:
+        """How many pieces."""
+        return self.columns * self.rows
+
+
+@dataclass(frozen=True, slots=True)
+class Stagger:
+    """A block that discs lie in by offset rows; *corners* are those of their squares, from the block's corner."""
+
+    kind: int
+    size: int
+    corners: tuple[tuple[int, int], ...]
+    pitch: int
+    """From disc to disc in a row."""
+    rise: int
+    """From row to row."""
+    offset: int
+    """What every other row is moved aside."""
+    is_along: bool = False
+    """Rows run along the cloth instead of across it."""
+
+    @property
+    def count(self) -> int:
+        """How many discs."""
+        return len(self.corners)
+
+
+Content: TypeAlias = Grid | Stagger
+
+
+@dataclass(slots=True)
+class Cell:
+    """A rectangular part: whole (with content, or left over), or cut in two."""
+
+    x: int
+    y: int
+    width: int
+    length: int
+    content: Content | None = None
+    parts: tuple["Cell", "Cell"] | None = field(default=None, repr=False)
+    is_cut_across: bool = True
+
+    def cut_across(self, length: int) -> tuple["Cell", "Cell"]:
+        """Cut from side to side at *length* from this part's beginning."""
+        first = Cell(self.x, self.y, self.width, length)
+        second = Cell(self.x, self.y + length, self.width, self.length - length)
+        self.parts, self.is_cut_across = (first, second), True
+        return self.parts
+
+    def cut_along(self, width: int) -> tuple["Cell", "Cell"]:
+        """Cut from end to end at *width* from this part's left side."""
+        first = Cell(self.x, self.y, width, self.length)
+        second = Cell(self.x + width, self.y, self.width - width, self.length)
+        self.parts, self.is_cut_across = (first, second), False
+        return self.parts
+
+    def leaves(self) -> Iterator["Cell"]:
+        """Every part that isn't cut any further, in the order of the cuts."""
+        if self.parts is None:
+            yield self
+        else:
+            for part in self.parts:
+                yield from part.leaves()
+
+
+def place(cell: Cell, width: int, length: int, content: Content, is_across_first: bool) -> list[Cell]:
+    """Cut a part of *width* × *length* out of *cell*'s corner for *content*; returns what is left of the cell."""
+    rest: list[Cell] = []
+    for is_across in (is_across_first, not is_across_first):
+        if is_across and length < cell.length:
+            cell, left = cell.cut_across(length)
+            rest.append(left)
+        elif not is_across and width < cell.width:
+            cell, left = cell.cut_along(width)
+            rest.append(left)
+    cell.content = content
+    return rest

@@ -1,0 +1,182 @@
+"""The best of many attempts to lay a cut list into one rectangle.
+
+Most pieces first, then most area, then the least length, then what is left in the largest parts. Attempts follow
+fixed rules and then rules drawn at random from a fixed seed: the same question always has the same answer. It is a
+search, not a proof: a better layout may exist.
+
+Sizes are whole micrometres with one kerf added (see cutting_cells).
+"""
+
+from collections.abc import Callable, Iterator, Sequence
+from dataclasses import dataclass, replace
+from random import Random
+from typing import TypeAlias
+
+from catalog.stock.cutting_cells import Cell
+from catalog.stock.cutting_filling import BLOCK, FITS, ROW, SINGLE, SPLITS, Attempt, Fit, Kind, Split, fill
+from catalog.stock.cutting_uniform import blocks
+
+SEED = 1195
+SINGLE_PIECES_UP_TO = 40
+"""Longer lists are placed by rows and blocks only."""
+
+
+@dataclass(frozen=True, slots=True)
+class Effort:
+    """How long to look: attempts by random rules, and how often the length is halved in on."""
+
+    random_attempts: int
+    halvings: int
+
+
+QUICK = Effort(0, 0)
+THOROUGH = Effort(150, 6)
+
+Key: TypeAlias = Callable[[Kind], float]
+Rules: TypeAlias = tuple[Sequence[Kind], Fit, Split, int]
+
+KEYS: tuple[Key, ...] = (
+    lambda kind: -kind.area,
+    lambda kind: -max(kind.shapes[0][:2]),
+    lambda kind: -min(kind.shapes[0][:2]),
+    lambda kind: kind.area,
+)
+FIXED = ((0, 2, 0, BLOCK), (0, 0, 1, BLOCK), (1, 2, 0, BLOCK), (2, 1, 1, ROW), (3, 2, 0, BLOCK), (3, 0, 1, BLOCK))
+"""Order, fit, split and grain of the attempts that are always made."""
+
+
+def search(width: int, length: int, kinds: Sequence[Kind], effort: Effort = THOROUGH) -> Attempt:
+    """The best layout of *kinds* in *width* × *length*.
+
+    Offset rows of discs are used only where they hold more pieces than straight ones: straight cuts can't part them.
+    """
+    kinds = [kind for kind in kinds if _lies_in(kind, width, length)]
+    best = _most(width, length, kinds, effort, staggered=False)
+    if best.count < _asked(kinds) and any(kind.is_disc for kind in kinds):
+        offset = _most(width, length, kinds, effort, staggered=True)
+        best = offset if offset.count > best.count else best
+    elif best.count:
+        best = _shortest(width, best, kinds, effort)
+    return best
+
+
+def is_better(one: Attempt, other: Attempt) -> bool:
+    """Whether *one* is the better layout of the same list in the same cloth."""
+    plain, plain_other = (one.count, one.area, -one.length), (other.count, other.area, -other.length)
+    return plain > plain_other or (plain == plain_other and _togetherness(one) > _togetherness(other))
+
+
+def _togetherness(attempt: Attempt) -> int:
+    """Large where what is left hangs together."""
+    return sum((leaf.width * leaf.length) ** 2 for leaf in attempt.root.leaves() if leaf.content is None)
+
+
+def _most(width: int, length: int, kinds: Sequence[Kind], effort: Effort, staggered: bool) -> Attempt:
+    """The attempt with the most pieces; looks no further once a bound by area is reached."""
+    best = straight_rows(width, length, kinds)
+    ceiling = _ceiling(width * length, kinds)
+    if len(kinds) == 1 and not staggered:
+        laid = blocks(width, length, kinds[0])
+        return laid if is_better(laid, best) else best
+    for rules in _fixed(kinds):
+        found = fill(width, length, *rules, staggered)
+        best = found if is_better(found, best) else best
+    rng = Random(SEED)
+    for _ in range(effort.random_attempts):
+        if len(kinds) == 1 or (best.count >= ceiling and not staggered):
+            break
+        found = fill(width, length, *_drawn(kinds, best.count, rng), staggered)
+        best = found if is_better(found, best) else best
+    return best
+
+
+def straight_rows(width: int, length: int, kinds: Sequence[Kind]) -> Attempt:
+    """One kind after the other in straight rows from side to side: what a person lays out without a plan."""
+    order = [replace(kind, shapes=(_way(width, length, kind),)) for kind in kinds]
+    return fill(width, length, order, FITS[2], SPLITS[0], BLOCK)
+
+
+def _way(width: int, length: int, kind: Kind) -> tuple[int, int, bool]:
+    """The way to lie that takes the least length for the list, or gives most pieces."""
+    ways = [shape for shape in kind.shapes if shape[0] <= width and shape[1] <= length]
+
+    def worth(shape: tuple[int, int, bool]) -> tuple[int, int]:
+        columns = width // shape[0]
+        rows = min(length // shape[1], -(-kind.quantity // columns))
+        return min(kind.quantity, columns * rows), -rows * shape[1]
+
+    return max(ways, key=worth)
+
+
+def _shortest(width: int, best: Attempt, kinds: Sequence[Kind], effort: Effort) -> Attempt:
+    """The same pieces in less length, where attempts in a shorter cloth succeed."""
+    low = max(-(-best.area // width), max(min(h for _, h, _ in kind.shapes) for kind in kinds))
+    tried = replace(effort, random_attempts=effort.random_attempts // 3)
+    for _ in range(effort.halvings):
+        if low >= best.length or len(kinds) == 1:
+            break
+        middle = (low + best.length) // 2
+        fitting = [kind for kind in kinds if _lies_in(kind, width, middle)]
+        found = _most(width, middle, fitting, tried, staggered=False) if len(fitting) == len(kinds) else None
+        if found is not None and found.count == best.count:
+            best = found
+        else:
+            low = middle + 1
+    return best
+
+
+def _fixed(kinds: Sequence[Kind]) -> Iterator[Rules]:
+    for key, fit, split, grain in FIXED:
+        yield sorted(kinds, key=KEYS[key]), FITS[fit], SPLITS[split], grain
+
+
+def _drawn(kinds: Sequence[Kind], reached: int, rng: Random) -> Rules:
+    """Rules drawn at random; every other time for one piece more than was reached, the smallest of the list."""
+    asked = _asked(kinds)
+    grain = rng.choice((SINGLE, SINGLE, ROW, BLOCK)) if asked <= SINGLE_PIECES_UP_TO else rng.choice((ROW, BLOCK))
+    if reached < asked and rng.random() < 0.5:
+        kinds = _smallest(kinds, reached + 1)
+    if grain == SINGLE:
+        kinds = [replace(kind, quantity=1) for kind in kinds for _ in range(kind.quantity)]
+    key, noise = rng.choice(KEYS), rng.choice((0.0, 0.2, 0.6, 1.0))
+    order = sorted(kinds, key=lambda kind: key(kind) * (1 + noise * (rng.random() - 0.5)))
+    return order, rng.choice(FITS), rng.choice(SPLITS), grain
+
+
+def _smallest(kinds: Sequence[Kind], number: int) -> list[Kind]:
+    kept: list[Kind] = []
+    for kind in sorted(kinds, key=lambda kind: kind.area):
+        quantity = min(kind.quantity, number - _asked(kept))
+        if quantity:
+            kept.append(replace(kind, quantity=quantity))
+    return kept
+
+
+def _asked(kinds: Sequence[Kind]) -> int:
+    return sum(kind.quantity for kind in kinds)
+
+
+def _ceiling(area: int, kinds: Sequence[Kind]) -> int:
+    """No layout holds more pieces: the smallest ones fill the area."""
+    count = 0
+    for kind in sorted(kinds, key=lambda kind: kind.area):
+        fitting = min(kind.quantity, area // kind.area)
+        count, area = count + fitting, area - fitting * kind.area
+    return count
+
+
+def _lies_in(kind: Kind, width: int, length: int) -> bool:
+    return any(w <= width and h <= length for w, h, _ in kind.shapes)
+
+
+def clip(cell: Cell, length: int) -> Cell:
+    """*cell* without what lies beyond *length*: no piece does."""
+    end = min(cell.length, length - cell.y)
+    if cell.parts is None:
+        return replace(cell, length=end)
+    first, second = cell.parts
+    if second.y >= length:
+        return clip(first, length)
+    made = Cell(cell.x, cell.y, cell.width, end, None, None, cell.is_cut_across)
+    made.parts = clip(first, length), clip(second, length)
+    return made
