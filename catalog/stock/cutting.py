@@ -97,17 +97,19 @@ def _result(lot: Lot, pieces: tuple[Piece, ...], how: Cutting, room: Room, root:
 
 def _placements(root: Cell, room: Room, pieces: Sequence[Piece], kerf: int) -> list[Placement]:
     found: list[Placement] = []
+    block = 0
     for leaf in root.leaves():
         content = leaf.content
         if content is None:
             continue
+        block += isinstance(content, Stagger)
         for x, y in _corners(content):
             place = (room.x + leaf.x + x, room.y + leaf.y + y)
-            found.append(_placement(content, place, kerf, pieces[content.kind].is_disc))
+            found.append(_placement(content, place, kerf, pieces[content.kind].is_disc, block))
     return found
 
 
-def _placement(content: Grid | Stagger, place: tuple[int, int], kerf: int, is_disc: bool) -> Placement:
+def _placement(content: Grid | Stagger, place: tuple[int, int], kerf: int, is_disc: bool, block: int) -> Placement:
     sizes = (content.size, content.size) if isinstance(content, Stagger) else (content.width, content.length)
     return Placement(
         piece=content.kind,
@@ -117,7 +119,7 @@ def _placement(content: Grid | Stagger, place: tuple[int, int], kerf: int, is_di
         length_mm=(sizes[1] - kerf) / UM_PER_MM,
         is_turned=isinstance(content, Grid) and content.is_turned,
         is_disc=is_disc,
-        is_offset=isinstance(content, Stagger),
+        block=block if isinstance(content, Stagger) else 0,
     )
 
 

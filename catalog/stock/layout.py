@@ -19,8 +19,13 @@ class Placement:
     length_mm: float
     is_turned: bool = False
     is_disc: bool = False
-    is_offset: bool = False
-    """A disc in offset rows: no straight cut frees it."""
+    block: int = 0
+    """Which block of offset rows a disc lies in, counted from 1; 0 where straight cuts free the piece."""
+
+    @property
+    def is_offset(self) -> bool:
+        """A disc in offset rows: no straight cut frees it."""
+        return self.block > 0
 
 
 @dataclass(frozen=True, slots=True)
