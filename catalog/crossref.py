@@ -142,7 +142,7 @@ def _agreed(views: Sequence[Aimed]) -> Aimed:
     first, target = views[0]
     if len({view.verdict for view, _ in views}) == 1:
         return views[0]
-    said = "; ".join(f"as {target.reading.label}: {view.verdict}" for view, target in views)
+    said = "; ".join(f"{target.reading.label}: {view.verdict}" for view, target in views)
     text = f"The readings disagree: {said}."
     by_purpose = dict.fromkeys(first.by_purpose, Verdict.CANNOT_SAY)
     finding = Finding("readings", None, text, "")

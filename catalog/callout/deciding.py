@@ -25,42 +25,63 @@ class Decided:
     question: str | None = None
 
 
+@dataclass(frozen=True, slots=True)
+class Tried:
+    """A reading in one direction, and what speaks against it."""
+
+    turned: Turned
+    fault: Fault | None
+
+    @property
+    def made(self) -> Combined:
+        """The combination of senses."""
+        return self.turned.made
+
+
 def decide(draft: Draft) -> Decided:
     """Generate every reading, rule out what is no cloth, offer repairs where nothing is left."""
-    every = combinations(draft)
-    judged = [(made, fault_of(made, draft.weave, draft.is_dutch)) for made in every]
-    alive = [made for made, fault in judged if fault is None and not made.clashes]
-    best = min((made.rank for made in alive), default=0)
-    alive = [made for made in alive if made.rank == best]
+    turned = [t for made in _distinct(combinations(draft)) for t in senses_of_direction(draft, made)]
+    tried = [Tried(t, fault_of(t.made, t.weave or draft.weave, draft.is_dutch)) for t in turned]
+    alive = [t for t in tried if t.fault is None and not t.made.clashes]
+    best = min((t.made.rank for t in alive), default=0)
+    alive = [t for t in alive if t.made.rank == best]
     if alive:
-        return _survivors(draft, alive, [(m, f) for m, f in judged if f and m.rank == 0 and not m.is_inferred], best)
-    clashing = [made for made, fault in judged if fault is None]
-    return _contradiction(draft, clashing) if clashing else _no_cloth(draft, judged)
+        return _survivors(draft, alive, [t for t in tried if t.fault and _is_worth_saying(t)], best)
+    clashing = [t.made for t in tried if t.fault is None]
+    return _contradiction(draft, clashing) if clashing else _no_cloth(draft, tried)
 
 
-def _survivors(draft: Draft, alive: list[Combined], ruled_out: list[tuple[Combined, Fault]], rank: int) -> Decided:
+def _is_worth_saying(tried: Tried) -> bool:
+    """What is ruled out is shown, unless it was but the other unit of a bare number."""
+    made = tried.made
+    return made.rank == 0 and not made.is_inferred and not any(o.sense.startswith("unit") for o in made.options)
+
+
+def _survivors(draft: Draft, alive: list[Tried], ruled_out: list[Tried], rank: int) -> Decided:
     done = Decided()
-    turned = [one for made in _distinct(alive) for one in senses_of_direction(draft, made)]
+    turned = [t.turned for t in alive]
     done.readings = [_reading(draft, t.made, t.label, t.likelihood, weave=t.weave, notes=t.notes) for t in turned]
-    for made, fault in ruled_out:
-        done.readings.append(_ruled_out(draft, made, fault))
-    asked = [
-        t
-        for t in turned
-        if not t.is_quiet
-        and not any(o.sense in QUIET_SENSES for o in t.made.options if o.likelihood is Likelihood.POSSIBLE)
-    ]
-    done.must_ask = len(asked) > 1 or rank > 1
-    if rank > 1 and ruled_out:
-        draft.problem(ruled_out[0][1].code, ruled_out[0][1].message)
+    done.readings += [_ruled_out(draft, t) for t in ruled_out]
+    asked = [t for t in turned if not t.is_quiet and not _is_customary(t)]
+    sought = all(t.likelihood is Likelihood.POSSIBLE for t in turned)
+    usual_lost = [t for t in ruled_out if t.turned.likelihood is Likelihood.USUAL]
+    done.must_ask = len(asked) > 1 or rank > 1 or (sought and bool(usual_lost))
+    if done.must_ask and len(asked) < 2 and ruled_out and ruled_out[0].fault:
+        draft.problem(ruled_out[0].fault.code, ruled_out[0].fault.message)
     if done.must_ask:
         done.question = question(done.readings)
     return done
 
 
+def _is_customary(turned: Turned) -> bool:
+    """True for a sense that custom leaves unasked, though it is possible."""
+    return any(o.sense in QUIET_SENSES for o in turned.made.options if o.likelihood is Likelihood.POSSIBLE)
+
+
 def _distinct(made: list[Combined]) -> list[Combined]:
+    """Combinations that differ in a figure or a word; the nearest at hand of those that don't."""
     kept: dict[object, Combined] = {}
-    for one in sorted(made, key=lambda m: m.likelihood is not Likelihood.USUAL):
+    for one in sorted(made, key=lambda m: (m.rank, m.likelihood is not Likelihood.USUAL)):
         extra = tuple((o.rating, o.alloy, o.form, o.grade, o.missing) for o in one.options)
         kept.setdefault((_figures(one.warp), _figures(one.weft), extra), one)
     return list(kept.values())
@@ -70,8 +91,11 @@ def _figures(side: Side) -> tuple[object, ...]:
     return tuple(length and length.mm for length in (side.pitch, side.wire, side.aperture))
 
 
-def _ruled_out(draft: Draft, made: Combined, fault: Fault) -> Reading:
-    return _reading(draft, made, made.label or "as written", Likelihood.RULED_OUT, notes=(fault.message,))
+def _ruled_out(draft: Draft, tried: Tried) -> Reading:
+    assert tried.fault
+    made, weave = tried.made, tried.turned.weave
+    label = tried.turned.label or "as written"
+    return _reading(draft, made, label, Likelihood.RULED_OUT, weave=weave, notes=(tried.fault.message,))
 
 
 def _contradiction(draft: Draft, clashing: Sequence[Combined]) -> Decided:
@@ -96,35 +120,31 @@ def _mended_readings(draft: Draft, repairs: Sequence[Mended], likelihood: Likeli
     return list(seen.values())
 
 
-def _no_cloth(draft: Draft, judged: Sequence[tuple[Combined, Fault | None]]) -> Decided:
+def _no_cloth(draft: Draft, tried: Sequence[Tried]) -> Decided:
     """Nothing can be woven as written: say why, and offer a slip of the unit, a twill or a Dutch weave that explains it."""
-    made, fault = judged[0]
+    fault = tried[0].fault
     assert fault is not None
-    repairs = [m for one, _ in judged[:4] for m in mend_unit(draft, one)]
+    repairs = [m for one in tried[:4] for m in mend_unit(draft, one.made)]
     if repairs:
         draft.problem("E_UNIT", f"{fault.message.rstrip('.')}; {repairs[0].label}?")
     else:
         draft.problem(fault.code, fault.message)
     readings = _mended_readings(draft, repairs, Likelihood.POSSIBLE)
-    readings += _other_weaves(draft, judged)
-    readings += [_ruled_out(draft, one, f) for one, f in judged[:4] if f is not None and not one.is_inferred]
+    readings += _other_weaves(draft, tried)
+    readings += [_ruled_out(draft, one) for one in tried[:4] if one.fault and not one.made.is_inferred]
     return Decided(readings, True, question(readings))
 
 
-def _other_weaves(draft: Draft, judged: Sequence[tuple[Combined, Fault | None]]) -> list[Reading]:
+def _other_weaves(draft: Draft, tried: Sequence[Tried]) -> list[Reading]:
     found = []
-    for made, fault in judged[:4]:
+    for made, fault in ((t.made, t.fault) for t in tried[:4]):
         if fault and fault.twill_only and draft.weave is None and not made.is_inferred:
-            found.append(
-                _reading(draft, made, "2/2 twill, its wires lying paired", Likelihood.POSSIBLE, weave=Weave.TWILLED)
-            )
-        elif fault and fault.code == "E_IMPOSSIBLE" and _packs_like_dutch(made):
-            bare = replace(
-                made, warp=replace(made.warp, aperture=None), weft=replace(made.weft, aperture=None), derived=()
-            )
-            found.append(
-                _reading(draft, bare, "plain Dutch, the word left out", Likelihood.POSSIBLE, weave=Weave.PLAIN_DUTCH)
-            )
+            found.append(_reading(draft, made, "2/2 twill, its wires lying paired", Likelihood.POSSIBLE, Weave.TWILLED))
+        elif fault and fault.code == "E_IMPOSSIBLE" and not draft.is_dutch and _packs_like_dutch(made):
+            warp, weft = replace(made.warp, aperture=None), replace(made.weft, aperture=None)
+            bare = replace(made, warp=warp, weft=weft, derived=())
+            label = "plain Dutch, the word left out"
+            found.append(_reading(draft, bare, label, Likelihood.POSSIBLE, Weave.PLAIN_DUTCH))
     return found
 
 
@@ -181,6 +201,7 @@ def _reading(
         warp=made.warp,
         weft=made.weft,
         alloy=draft.alloy or next((o.alloy for o in options if o.alloy), None),
+        material=draft.material,
         finish=", ".join(draft.finish) or None,
         crimp=draft.crimp,
         grade=next((o.grade for o in options if o.grade), None) or draft.grade,
@@ -211,8 +232,3 @@ def _mass(draft: Draft) -> float | None:
     from catalog.callout.bounds import figures_of
 
     return round(float(figures_of(draft.mass, "mass")[0][0]), 6) if draft.mass else None
-
-
-def directions(turned: Turned) -> bool:
-    """True where a reading only turns another."""
-    return turned.is_quiet

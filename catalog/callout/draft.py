@@ -63,6 +63,8 @@ class Draft:
     """Questions that don't bear on the numbers: which brass."""
     limits: dict[str, tuple[float | None, float | None]] = field(default_factory=dict)
     alloy: str | None = None
+    material: str | None = None
+    """A family whose grade the text leaves open."""
     weave: Weave | None = None
     is_dutch: bool = False
     """True where the text names a Dutch weave or filter cloth."""
@@ -83,6 +85,12 @@ class Draft:
     is_hardware: bool = False
     is_metric_tongue: bool = False
     """True where the words are not English: numbers without unit are rather millimetres."""
+
+    def __post_init__(self) -> None:
+        for at, item in enumerate(self.items):
+            item.at = at
+            for member in item.members:
+                member.at = at
 
     def note(self, text: str) -> None:
         """Say something once."""

@@ -36,6 +36,11 @@ def family_of(name: str) -> str:
     return next((family for start, family in FAMILIES.items() if name.startswith(start)), "stainless")
 
 
+def _family(name: str) -> str:
+    """The family of an alloy's id; a family's name stays."""
+    return name if name in OPEN_GRADES or name in CLOSED else family_of(name)
+
+
 def _brass_splits(draft: Draft) -> list[tuple[str, Item]]:
     """'80/20' beside brass is copper and zinc: CuZn20; without brass it is two numbers."""
     found = []
@@ -75,7 +80,7 @@ def _bare_numbers(draft: Draft) -> list[tuple[str, Item]]:
 
 def _yields_the_count(draft: Draft, item: Item) -> bool:
     """True where the word mesh behind 316 belongs to another number, which then is the count."""
-    at = draft.items.index(item)
+    at = item.at
     after = [i for i in draft.items[at + 1 : at + 3] if i.is_count_like and i.slot is None]
     if after and after[0].number and after[0].number.value not in BARE_NUMBERS:
         after[0].slot = "mesh"
@@ -94,7 +99,7 @@ def _other_count(draft: Draft, item: Item) -> bool:
 
 
 def _beside_steel(draft: Draft, item: Item) -> bool:
-    at = draft.items.index(item)
+    at = item.at
     around = (peek(draft.items, at - 1), peek(draft.items, at + 1))
     return any(i is not None and i.senses.get("material") in STEELS for i in around)
 
@@ -142,6 +147,7 @@ def _family_only(draft: Draft, families: list[tuple[str, Item]]) -> None:
         if draft.alloy == "Cu-ETP" or draft.alloy == "CS":
             draft.note(f"'{families[0][1].text}' taken as {draft.alloy}")
     else:
+        draft.material = names[0]
         draft.missing.append("material grade")
         draft.questions.append(OPEN_GRADES[names[0]])
         draft.note(f"{names[0]}: the grade isn't said")
@@ -165,7 +171,7 @@ def _zinc(draft: Draft, families: list[tuple[str, Item]]) -> None:
         word = next(i for i in draft.items if i.has("galvanised"))
         draft.problem(
             "E_MATERIAL",
-            f"{'Stainless' if other == 'stainless' or family_of(other) == 'stainless' else other.capitalize()} is not galvanised: one of the two words is wrong.",
+            f"{_family(other).capitalize()} is not galvanised: one of the two words is wrong.",
             word,
         )
     else:

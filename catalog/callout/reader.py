@@ -9,7 +9,7 @@ from catalog.callout.draft import Draft
 from catalog.callout.grades import grade_wires
 from catalog.callout.items import Item
 from catalog.callout.labelled import labelled_figures, tolerances
-from catalog.callout.labels import bounded, labelled, letters
+from catalog.callout.labels import bounded, labelled, letters, sided
 from catalog.callout.leftovers import bands, dates, leftovers, part_numbers, steel_codes
 from catalog.callout.measures import measured
 from catalog.callout.metals import metals
@@ -24,23 +24,26 @@ from catalog.callout.words import words
 
 LONGEST = 4000
 """Characters that are read; what comes after is no callout."""
+MOST_ITEMS = 300
+"""Words, numbers and signs that are read: work and time stay in proportion to the length."""
 
 
 def read(text: str) -> Understanding:
     """Understand *text*: every reading, what speaks against it, one question, what is missing. Never raises."""
     repaired = repair(text[:LONGEST])
-    items = _pieces(repaired.text)
+    tokens = tokenize(repaired.text)
+    items = _pieces(tokens[:MOST_ITEMS])
     parts = _alternatives(items)
     understood = _understand(Draft(parts[0]), repaired, text)
     if len(parts) > 1:
         understood = _with_alternative(understood, _understand(Draft(parts[1]), repaired, text))
-    if len(text) > LONGEST:
-        understood = _too_long(understood)
+    if len(text) > LONGEST or len(tokens) > MOST_ITEMS:
+        return _too_long(understood, min(LONGEST, repaired.place(items[-1].end) if items else 0))
     return understood
 
 
-def _pieces(text: str) -> list[Item]:
-    return bounded(labelled(letters(structured(measured(tokenize(text))))))
+def _pieces(tokens: list[Item]) -> list[Item]:
+    return bounded(sided(labelled(letters(structured(measured(tokens))))))
 
 
 def _alternatives(items: list[Item]) -> list[list[Item]]:
@@ -121,6 +124,11 @@ def _with_alternative(first: Understanding, other: Understanding) -> Understandi
     """The first choice, and the alternative that the text accepts; what the alternative leaves out is as in the first."""
     mains = [r for r in first.readings if r.likelihood is not Likelihood.RULED_OUT]
     extra = [_inherit(mains[0], r) for r in other.surviving[:1]] if mains else []
+    mains = (
+        [replace(r, alloy=r.alloy or extra[0].alloy, weave=r.weave or extra[0].weave) for r in mains]
+        if extra
+        else mains
+    )
     asks = (
         Status.ASK in (first.status, other.status)
         or not extra
@@ -151,9 +159,15 @@ def _inherit(main: Reading, other: Reading) -> Reading:
     return replace(other, label=f"stated alternative: {other.label}", likelihood=Likelihood.USUAL, **filled)
 
 
-def _too_long(understood: Understanding) -> Understanding:
-    message = f"The text is longer than {LONGEST} characters; what follows was not read."
-    status = Status.OUT_OF_SCOPE if understood.status is Status.OUT_OF_SCOPE else Status.ASK
+def _too_long(understood: Understanding, end: int) -> Understanding:
+    message = f"The text is too long for a callout: what follows column {end} was not read."
+    note = "only the beginning of the text was read"
+    readings = tuple(replace(r, likelihood=Likelihood.RULED_OUT, notes=(*r.notes, note)) for r in understood.readings)
+    problem = Problem("E_NOT_UNDERSTOOD", message, end + 1)
     return replace(
-        understood, status=status, problems=(*understood.problems, Problem("E_NOT_UNDERSTOOD", message, LONGEST + 1))
+        understood,
+        status=Status.OUT_OF_SCOPE,
+        readings=readings,
+        question=None,
+        problems=(problem, *understood.problems),
     )

@@ -75,6 +75,8 @@ class Reading:
     weft: Side = Side()
     alloy: str | None = None
     """Id in the alloy table where known, else as written; None where open."""
+    material: str | None = None
+    """The family where the text names one and leaves the grade open: 'stainless', 'brass', 'bronze', …"""
     finish: str | None = None
     crimp: str | None = None
     grade: str | None = None

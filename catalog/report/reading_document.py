@@ -3,6 +3,7 @@
 from typing import Any
 
 from catalog.callout.reading import Form, Reading, Side, Understanding
+from catalog.reference import alloys
 from catalog.units import Length
 
 SCHEMA = 1
@@ -11,10 +12,10 @@ Document = dict[str, Any]
 
 def reading_document(understanding: Understanding, line: int | None = None) -> Document:
     """Everything that a text was understood to say; *line* is its number in a file."""
-    document: Document = {"schema": SCHEMA, "text": understanding.text}
-    if line is not None:
-        document["line"] = line
-    return document | {
+    return {
+        "schema": SCHEMA,
+        "text": understanding.text,
+        "line": line,
         "status": understanding.status.value,
         "question": understanding.question,
         "readings": [
@@ -32,7 +33,9 @@ def reading_fields(reading: Reading) -> Document:
         "weave": reading.weave.value if reading.weave else None,
         "warp": _side(reading.warp),
         "weft": _side(reading.weft),
-        "alloy": reading.alloy,
+        "alloy": _table_id(reading.alloy),
+        "alloy_grade": reading.alloy,
+        "material": reading.material,
         "finish": reading.finish,
         "crimp": reading.crimp,
         "grade": reading.grade,
@@ -46,6 +49,12 @@ def reading_fields(reading: Reading) -> Document:
         "derived": list(reading.derived),
         "notes": list(reading.notes),
     }
+
+
+def _table_id(alloy_id: str | None) -> str | None:
+    """The alloy that scripts know: 1.4435 is a kind of 316L; which kind stands in alloy_grade."""
+    known = alloys.alloy(alloy_id) if alloy_id else None
+    return known.within or alloy_id if known else alloy_id
 
 
 def _side(side: Side) -> Document:

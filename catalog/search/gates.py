@@ -7,6 +7,9 @@ from catalog.search.candidate import Finding
 from catalog.search.comparison import Comparison
 from catalog.search.wording import mm, pct
 
+FAMILY_OF_WORD = {"phosphor bronze": "bronze", "duplex": "duplex stainless"}
+AMBIGUOUS = ("brass", "bronze")
+"""Names that several metals of different use go by."""
 NEEDS_AN_OPENING = ("aperture_mm", "open_area_pct")
 Gate = Callable[[Comparison], Finding | None]
 
@@ -47,6 +50,8 @@ def alloy_gate(c: Comparison) -> Finding | None:
     offered = c.made.alloy
     if c.target.alloy_rule == "any":
         return Finding("alloy", True, f"Any alloy was allowed; this is {_named(offered)}.")
+    if asked is None and c.target.reading.material is not None:
+        return _family_finding(c.target.reading.material, offered)
     if asked is None:
         return Finding("alloy", True, f"No alloy was asked; this is {_named(offered)}.")
     if offered is None:
@@ -61,12 +66,27 @@ def alloy_gate(c: Comparison) -> Finding | None:
     return Finding("alloy", ok, text if text.endswith(".") else text + ".", gate.source)
 
 
+def _family_finding(material: str, offered: str | None) -> Finding:
+    """A family was asked and its grade left open: another family fails; which brass or bronze is a question."""
+    known = alloys.alloy(offered) if offered else None
+    if known is None:
+        return Finding("alloy", None, f"Asked is {material}; the alloy of this cloth is not on record.")
+    is_called_bronze = material == "bronze" and known.id == "CuZn10"
+    if not is_called_bronze and not known.family.endswith(FAMILY_OF_WORD.get(material, material)):
+        return Finding("alloy", False, f"Asked is {material}; this is {known.family}, {_named(offered)}.", "as asked")
+    text = f"Asked is {material}, the grade isn't said; this is {_named(offered)}"
+    if material in AMBIGUOUS:
+        return Finding("alloy", None, f"{text}: ask which {material} is meant.", "as asked")
+    return Finding("alloy", True, f"{text}. Ask for the grade if it matters.", "as asked")
+
+
 def _named(alloy_id: str | None) -> str:
     if alloy_id is None:
         return "not on record"
     known = alloys.alloy(alloy_id)
     number = known.en_numbers[0] if known and known.en_numbers else ""
-    return f"{alloy_id} ({number})" if number.startswith(("1.", "2.", "3.")) else alloy_id
+    is_another_name = number.startswith(("1.", "2.", "3.")) and number != alloy_id
+    return f"{alloy_id} ({number})" if is_another_name else alloy_id
 
 
 def finish_gate(c: Comparison) -> Finding | None:

@@ -91,7 +91,7 @@ def candidate_lines(number: int, candidate: Candidate, units: str) -> Iterator[s
     yield f"{number:>2} {verdict_sign(candidate.verdict)} {words}"
     yield from _wrapped(candidate_name(candidate), "     ", "     ")
     for line in figure_lines(candidate, units):
-        yield f"     {line}"
+        yield from _wrapped(line, "     ", "       ")
     if len({*candidate.by_purpose.values()}) > 1:
         said = "; ".join(f"{name}: {verdict.value}" for name, verdict in candidate.by_purpose.items())
         yield from _wrapped(said, "     by purpose ", "     ")
