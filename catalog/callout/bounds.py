@@ -174,7 +174,7 @@ def _bound_range(draft: Draft, number: Item) -> None:
 def _purposes(draft: Draft) -> None:
     """'Retain 250 µm' asks for openings no larger, 'pass 250 µm' for openings no smaller."""
     for word in draft.terms("purpose"):
-        at = draft.items.index(word)
+        at = word.at
         word.taken = "limit"
         number = next((i for i in draft.items[at + 1 : at + 5] if i.is_number and not i.taken and i.is_length), None)
         if number is None:

@@ -132,6 +132,10 @@ def _filter_fault(made: Combined, weave: Weave | None) -> Fault | None:
     close, wide = (made.warp, made.weft) if weave is Weave.REVERSE_PLAIN_DUTCH else (made.weft, made.warp)
     if wide.pitch and wide.wire and wide.wire.mm >= wide.pitch.mm:
         return Fault("E_IMPOSSIBLE", f"Wire {mm(wide.wire.mm)} does not fit in a {mm(wide.pitch.mm)} pitch.")
+    if wide.pitch and wide.wire and wide.wire.mm < wide.pitch.mm / 20:
+        return Fault(
+            "E_IMPLAUSIBLE", f"Wire {mm(wide.wire.mm)} on a {mm(wide.pitch.mm)} pitch carries no filter cloth."
+        )
     if close.pitch and close.wire:
         packing = close.wire.mm / close.pitch.mm
         if not CLOSE_PACKED[0] <= packing <= CLOSE_PACKED[1]:

@@ -8,7 +8,7 @@ from catalog.units import Length, Number
 LENGTH_UNITS = ("mm", "um", "in", "thou", "cm", "m", "ft")
 
 
-@dataclass(slots=True)
+@dataclass(slots=True, eq=False)
 class Item:
     """A stretch of the text with the part it plays. *start* and *end* are offsets in the repaired text."""
 
@@ -41,6 +41,8 @@ class Item:
     members: "list[Item]" = field(default_factory=list)
     """Of a chain: the numbers that × or / join."""
     joins: list[str] = field(default_factory=list)
+    at: int = 0
+    """Its place among the items of the draft."""
     taken: str = ""
     """The part it plays, once a rule has claimed it: the role shown on the screen."""
 

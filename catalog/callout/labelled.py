@@ -1,5 +1,6 @@
 """Rules for numbers that a word or a unit names: counts, openings, pitches, wires, gauges, open area, mass, ratings."""
 
+import re
 from collections.abc import Sequence
 from dataclasses import replace
 
@@ -20,6 +21,8 @@ from catalog.cloth import Rating
 from catalog.reference import gauges, grades
 from catalog.units import MM_PER_INCH, Length
 
+BRINGS_WIRE = re.compile(r"3310|E\s?-?\s?11|410", re.IGNORECASE)
+"""Standards of test sieves, whose cloth has a nominal wire; a list of openings alone has none."""
 COUNT_UNITS = ("/in", "/cm", "/in2", "/cm2", "mesh sign", "per length")
 SYSTEMS = ("USSWG", "SWG", "BWG", "AWG")
 COMMON_SYSTEMS = ("USSWG", "SWG")
@@ -144,7 +147,11 @@ def _meshes(draft: Draft) -> None:
         row = [m for m in members if not m.taken and m.slot == "mesh"][:2]
         if not row:
             continue
-        if row[0].is_length or row[0].unit == "hundredths" or (row[0].number and row[0].number.kind == "fraction"):
+        if row[0].unit == "hundredths":
+            take(row, "unknown")
+            message = f"{row[0].text} mesh may be two counts, a band of particles or hundredths of a millimetre: which?"
+            draft.problem("E_NOT_UNDERSTOOD", message, row[0])
+        elif row[0].is_length or (row[0].number and row[0].number.kind == "fraction"):
             _mesh_lengths(draft, row)
         elif row[0].number and row[0].number.value < 1:
             _small_mesh(draft, row)
@@ -286,19 +293,15 @@ def _apertures(draft: Draft) -> None:
     """'0.25 mm aperture', 'maille 0,10', '3/8 sq opg', 'slot 1 x 8 mm': clear openings; of a sieve, with the standard's wire."""
     for row in groups(draft, "aperture"):
         take(row, "aperture")
-        if draft.is_sieve and row[0].is_length and _sieve_opening(draft, row[0]):
-            continue
-        _lengths(draft, "aperture", row)
-    for item in draft.items:
-        if (
-            item.is_number
-            and not item.taken
-            and item.slot is None
-            and item.is_length
-            and draft.is_sieve
-            and _sieve_opening(draft, item)
-        ):
-            item.taken = "aperture"
+        for number in row:
+            _restated(draft, "aperture", number)
+        if not (draft.is_sieve and row[0].is_length and _sieve_opening(draft, row[0])):
+            _lengths(draft, "aperture", row)
+    if draft.is_sieve and not any(n.taken == "aperture" for n in draft.all_numbers()):
+        for number in draft.numbers():
+            if number.slot is None and number.is_length and _sieve_opening(draft, number):
+                number.taken = "aperture"
+                break
 
 
 def _sieve_opening(draft: Draft, number: Item) -> bool:
@@ -313,7 +316,9 @@ def _sieve_opening(draft: Draft, number: Item) -> bool:
             number,
         )
         return False
-    if not draft.standards and not any(n.slot == "wire" for n in draft.all_numbers()):
+    if not any(BRINGS_WIRE.search(s) for s in draft.standards) and not any(
+        n.slot == "wire" for n in draft.all_numbers()
+    ):
         opening = length_claim("aperture", [number])
         claims = sieve_claims(sieve, number)
         draft.choices.append(
@@ -344,7 +349,8 @@ def _wires(draft: Draft) -> None:
 def _lengths(draft: Draft, slot: str, row: list[Item]) -> None:
     """Lengths with a unit are claims; without one both units are thought of, the likelier first."""
     for number in row:
-        _restated(draft, slot, number)
+        if slot != "aperture":
+            _restated(draft, slot, number)
     if row[0].unit == "hundredths" or row[-1].unit == "hundredths":
         _hundredths(draft, slot, row)
     elif all(n.is_length for n in row):
@@ -358,8 +364,21 @@ def _restated(draft: Draft, slot: str, number: Item) -> None:
         again.taken = slot
         if again.is_length:
             draft.claims.append(length_claim(slot, [again]))
+        elif (
+            slot == "aperture"
+            and again.unit == "designation"
+            and number.is_length
+            and not is_opening_of(again, number.length())
+        ):
+            draft.problem("E_INCONSISTENT", f"No. {again.text} doesn't open {number.text} {number.unit}.", again)
         elif slot == "pitch" and (claim := count_claim([again])):
             draft.claims.append(claim)
+
+
+def hundredths(draft: Draft, slot: str, row: list[Item]) -> None:
+    """A stroke and 100 behind a number, without a label: see the rule for labelled ones."""
+    take(row, slot)
+    _hundredths(draft, slot, row)
 
 
 def _hundredths(draft: Draft, slot: str, row: list[Item]) -> None:
@@ -377,6 +396,7 @@ def unit_options(draft: Draft, slot: str, row: list[Item]) -> list[Option]:
     """A length without a unit: inches and millimetres, the preferred one first."""
     first = preferred_unit(draft, row)
     other = "mm" if first == "in" else "in"
+    last = 2 if other == "mm" and not draft.is_dutch else 1
     dropped_zero = any(n.number and n.number.written[0] == "." for n in row)
     written = "/".join(n.text for n in row)
     return [
@@ -389,7 +409,7 @@ def unit_options(draft: Draft, slot: str, row: list[Item]) -> list[Option]:
             (f"{written}: no unit; taken as {unit}",) if rank or unit == "mm" or not dropped_zero else (),
             sense="unit" if rank < 2 else "unit dropped zero",
         )
-        for unit, rank in ((first, 0), (other, 2 if dropped_zero else 1))
+        for unit, rank in ((first, 0), (other, last if dropped_zero else 1))
     ]
 
 
@@ -398,7 +418,10 @@ def preferred_unit(draft: Draft, row: list[Item]) -> str:
     cloth = [
         n
         for n in draft.all_numbers()
-        if n.is_length and n.taken != "form" and n not in row and n.unit not in ("m", "ft", "cm")
+        if n.is_length
+        and n.taken not in ("form", "rating", "limit")
+        and n not in row
+        and n.unit not in ("m", "ft", "cm")
     ]
     if cloth:
         return "in" if cloth[0].unit in ("in", "thou") else "mm"
@@ -435,6 +458,9 @@ def gauge_options(draft: Draft, row: list[Item]) -> list[Option]:
             )
             continue
         options.append(_gauge_option(row, system, known))
+    if named == "SWG" and (steel := gauge_length(row[0], "USSWG")) and options:
+        inches = float(steel.mm / MM_PER_INCH)
+        draft.note(f"SWG taken as the British standard; the US steel wire gauge of that number is {inches:.4f} in")
     for n in row:
         take(n.restated, "wire")
     return _settled(draft, row, options, stated) if stated else _merged(options)

@@ -69,10 +69,11 @@ def labelled(items: list[Item]) -> list[Item]:
             last = item
         elif is_separator(item) and item.text != ")":
             last = None
-        elif item.has("slot") and not item.taken:
-            _give(items, at, item, last)
-        elif item.has("side") and not item.taken:
-            _give_side(items, at, item, last)
+        elif item.kind == "term" and not item.taken:
+            if item.has("slot"):
+                _give(items, at, item, last)
+            if item.has("side"):
+                _give_side(items, at, item, last)
     return items
 
 
@@ -82,13 +83,20 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
     ahead = _ahead(items, at + 1)
     behind_a_number = at > 0 and items[at - 1] is last and slot in ("mesh", "count")
     points_on = after is not None and after.text in EQUALS and not behind_a_number
-    if last is not None and not points_on and _accepts(_tail(last), slot):
+    if last is not None and not points_on and _accepts(_tail(last), slot) and not _fits_ahead(last, ahead, slot):
         _set(last, slot, backwards=True)
         label.taken = slot
     elif ahead is not None and _accepts(_head(ahead), slot):
         _set(ahead, slot, backwards=False)
         label.taken = slot
         _head(ahead).senses["label before"] = ""
+
+
+def _fits_ahead(last: Item, ahead: Item | None, slot: str) -> bool:
+    """'0.5 mm wire 0.2 mm': between two lengths the wire is the thinner."""
+    if slot != "wire" or ahead is None or not (last.is_number and ahead.is_number) or ahead.slot or not ahead.is_length:
+        return False
+    return last.is_length and ahead.length().mm < last.length().mm
 
 
 def _tail(item: Item) -> Item:
@@ -167,13 +175,30 @@ def _give_side(items: list[Item], at: int, word: Item, last: Item | None) -> Non
         return
     for number in holder.members or [holder]:
         number.side = number.side or side
-    word.taken = "direction"
+    word.taken = word.taken or "direction"
+    if holder is not last and not word.has("slot"):
+        word.senses["leads"] = ""
+
+
+def sided(items: list[Item]) -> list[Item]:
+    """What stands in a clause that names warp or weft is of that direction: 'weft 110/in wire .010'."""
+    side: str | None = None
+    for item in items:
+        if is_separator(item):
+            side = None
+        elif item.has("side"):
+            side = item.senses["side"] if item.has("leads") else None
+        elif side is not None:
+            both = item.kind == "chain" and all(m.is_count_like for m in item.members)
+            for number in [] if both else item.members or ([item] if item.is_number else []):
+                number.side = number.side or side
+    return items
 
 
 def _points_on(items: list[Item], at: int) -> bool:
     """True where the word leads its number: '=' or a label behind it, or a clause that begins with it."""
     after, before = peek(items, at + 1), peek(items, at - 1)
-    return (after is not None and (after.text in EQUALS or after.has("slot"))) or is_separator(before)
+    return (after is not None and (after.text in EQUALS or after.senses.get("slot") == "wire")) or is_separator(before)
 
 
 def _ahead_over_labels(items: list[Item], at: int) -> Item | None:
@@ -197,28 +222,26 @@ def bounded(items: list[Item]) -> list[Item]:
     return items
 
 
-def _bound_holder(items: list[Item], at: int, item: Item, before: Item | None, after: Item | None) -> Item | None:
-    if item.text.lower().startswith(("or ", "and ", "oder ")):
-        return before
-    if item.kind == "sign" or after is None or before is None or before.bound:
-        return after if after is not None and not (after.bound and item.kind != "sign") else before
-    own = peek(items, items.index(after) + 1)
-    has_own = own is not None and own.has("compare")
-    return (
-        after
-        if "label before" in _head(after).senses and not has_own
-        else (before if item.senses["compare"] in ("least", "most") else after)
-    )
+def _bound_holder(items: list[Item], at: int, item: Item, before: int | None, after: int | None) -> Item | None:
+    earlier = None if before is None else items[before]
+    later = None if after is None else items[after]
+    if item.text.lower().startswith(("or ", "and ", "oder ")) or later is None:
+        return earlier
+    if item.kind == "sign" or earlier is None or earlier.bound:
+        return later
+    own = peek(items, (after or 0) + 1)
+    leads = "label before" in _head(later).senses and not (own is not None and own.has("compare"))
+    return later if leads or item.senses["compare"] not in ("least", "most") else earlier
 
 
-def _near(items: list[Item], at: int, step: int) -> Item | None:
-    """The nearest number on one side, within the clause."""
+def _near(items: list[Item], at: int, step: int) -> int | None:
+    """The place of the nearest number on one side, within the clause."""
     at += step
     while 0 <= at < len(items) and not is_separator(items[at]):
         item = items[at]
         if item.is_number or item.kind == "chain":
-            return item
-        if item.has("compare") or item.text in "≤≥<>":
+            return at
+        if item.has("compare") or (item.kind == "sign" and item.text in "≤≥<>"):
             return None
         at += step
     return None

@@ -55,7 +55,7 @@ def bands(draft: Draft) -> None:
 def dates(draft: Draft) -> None:
     """'16-Mar' and '04-Jan' are 3/16 and 1/4 that a spreadsheet took for dates; beside a whole cloth a date is a date."""
     for item in draft.kinds("date"):
-        before = peek(draft.items, draft.items.index(item) - 1)
+        before = peek(draft.items, item.at - 1)
         item.taken = "date"
         if before is not None and before.has("delivery"):
             draft.note(f"{item.text}: taken as a date of delivery")
@@ -123,7 +123,7 @@ def _pointed(digits: str) -> str:
 def part_numbers(draft: Draft) -> None:
     """A number behind 'P/N' or 'art. no.' names an article. A scheme that nobody explains is a question, never decoded."""
     for item in draft.kinds("code"):
-        before = draft.items[max(0, draft.items.index(item) - 3) : draft.items.index(item)]
+        before = draft.items[max(0, item.at - 3) : item.at]
         item.taken = "code"
         if any(b.has("part number") or b.has("number sign") for b in before):
             draft.note(f"{item.text}: an article or order number, not read")
@@ -133,23 +133,6 @@ def part_numbers(draft: Draft) -> None:
                 f"'{item.text}' looks like a part number whose scheme isn't known: what cloth is it?",
                 item,
             )
-    for at, item in enumerate(draft.items):
-        if item.has("part number") and item.text.lower() not in ("pos", "item", "line", "code", "ref", "part"):
-            _name_behind(draft, at)
-
-
-def _name_behind(draft: Draft, at: int) -> None:
-    """Take the number (or the word and number) behind 'P/N' out of the figures."""
-    for item in draft.items[at + 1 : at + 6]:
-        if (item.kind == "sign" and item.text in ".:#-/") or item.has("number sign"):
-            continue
-        if item.taken or item.kind == "term" or item.slot or (item.unit and item.unit != "designation"):
-            return
-        item.taken = "code"
-        for member in item.members:
-            member.taken = "code"
-        if item.is_number:
-            return
 
 
 def leftovers(draft: Draft) -> None:
@@ -185,7 +168,10 @@ def _loose_term(draft: Draft, item: Item, at: int) -> None:
     role = next((r for r in ROLES if item.has(r)), "unknown")
     item.taken = ROLES.get(role, "unknown")
     after = peek(draft.items, at + 1)
-    if item.has("compare") and not item.has("harmless"):
+    unit = item.senses.get("unit", "")
+    if unit.startswith("/") or (len(item.text) > 2 and unit and not item.has("harmless")):
+        _unclear(draft, item, f"'{item.text}' has no figure before it.")
+    elif item.has("compare") and not item.has("harmless"):
         _unclear(draft, item, f"'{item.text}' has no figure that it limits.")
     elif item.has("gauge") and not item.has("unit") and len(item.text) > 1:
         _unclear(draft, item, f"'{item.text}' has no number.")

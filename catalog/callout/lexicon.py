@@ -98,17 +98,20 @@ def longest(row: list[tuple[str, int, int]], at: int) -> tuple[int, dict[str, st
 
 
 def _past_joint(row: list[tuple[str, int, int]], index: int) -> int:
-    """Behind a point or hyphen that is glued to the word before it."""
-    if (
-        0 < index < len(row)
-        and row[index][0] in ".-"
-        and row[index][1] == row[index - 1][2]
-        and row[index - 1][0][-1].isalpha()
-    ):
-        after = index + 1
-        if row[index][0] == "-" and not (
-            after < len(row) and row[after][1] == row[index][2] and row[after][0][0].isalpha()
-        ):
-            return index
-        return after
+    """Behind the points and hyphens that are glued to the word before: 'Art.-Nr.', 'hi-carbon'."""
+    while _is_joint(row, index):
+        index += 1
     return index
+
+
+def _is_joint(row: list[tuple[str, int, int]], index: int) -> bool:
+    if not 0 < index < len(row) or row[index][0] not in ".-" or row[index][1] != row[index - 1][2]:
+        return False
+    if row[index][0] == ".":
+        return row[index - 1][0][-1].isalpha()
+    after = row[index + 1] if index + 1 < len(row) else ("", -1, -1)
+    return (
+        (row[index - 1][0][-1].isalpha() or row[index - 1][0] == ".")
+        and after[1] == row[index][2]
+        and after[0][0].isalpha()
+    )

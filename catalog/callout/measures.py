@@ -7,12 +7,20 @@ from catalog.units import MM_PER_INCH, parse_number
 
 MILLIMETRES_OF_INCHES = (MM_PER_INCH * 98 / 100, MM_PER_INCH * 102 / 100)
 SIGNS = {'"': "in", "'": "ft", "%": "%", "#": "mesh sign"}
+COUNTING = ("mesh", "count", "aperture", "wire")
+"""Words that may stand between a count and its unit: meshes, maschen, openings, wires."""
 MOST_PIECES = 100_000
 
 
 def measured(items: list[Item]) -> list[Item]:
     """Join every number with the unit, gauge or sign that belongs to it."""
-    for rule in (_counted_over_a_length, _gauges_named_first, _numbers_with_units, _numbers_behind_signs):
+    for rule in (
+        _counted_over_a_length,
+        _counts_with_units,
+        _gauges_named_first,
+        _numbers_with_units,
+        _numbers_behind_signs,
+    ):
         items = rule(items)
     return items
 
@@ -58,6 +66,22 @@ def _counted_over_a_length(items: list[Item]) -> list[Item]:
             return None
         count.unit, count.system = "per length", str(span)
         return join(count, unit, count), at + 4
+
+    return rewrite(items, rule)
+
+
+def _counts_with_units(items: list[Item]) -> list[Item]:
+    """'24 Maschen/cm', '60 mesh per inch', '3600 meshes per square inch': the unit behind the word belongs to the count."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        number, label, unit = items[at], peek(items, at + 1), peek(items, at + 2)
+        if not (number.is_number and label and label.senses.get("slot") in COUNTING and unit):
+            return None
+        name = unit.senses.get("unit", "")
+        if not name.startswith("/") or number.unit is not None:
+            return None
+        number.unit, number.slot = name, "count"
+        return join(number, unit, number), at + 3
 
     return rewrite(items, rule)
 

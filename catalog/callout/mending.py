@@ -88,7 +88,7 @@ def _with_sieve(made: Combined, found: list[Mended]) -> list[Mended]:
 
 def mend_unit(draft: Draft, made: Combined) -> list[Mended]:
     """The unit slips that would explain a reading that makes no cloth: factor 25.4 or 1000 in one figure."""
-    if made.clashes:
+    if made.clashes or any(o.sense.startswith("unit") for o in made.options):
         return []
     found = []
     for slot in ("wire", "aperture"):

@@ -8,9 +8,10 @@ from dataclasses import replace
 from catalog.callout.claims import count_claim, length_claim
 from catalog.callout.draft import POSSIBLE, USUAL, Claim, Draft, Option
 from catalog.callout.items import Item
-from catalog.callout.labelled import gauge_options, preferred_unit, take, unit_options
+from catalog.callout.labelled import gauge_options, hundredths, preferred_unit, take, unit_options
 from catalog.callout.reading import Form
 from catalog.callout.sieve_senses import is_opening_of, sieve_option
+from catalog.callout.vocabulary.materials import BARE_NUMBERS
 from catalog.units import MM_PER_INCH
 
 FINE_MM = 4
@@ -59,7 +60,9 @@ def _states_opening(draft: Draft) -> bool:
 def _product(draft: Draft, chain: Item) -> None:
     free = _free(chain)
     shape = shape_of(free)
-    if draft.has_count:
+    if _is_of_a_new_side(draft, free):
+        _whole_numbers_first(draft, free, shape)
+    elif draft.has_count:
         _beside_counts(draft, chain, free, shape)
     elif draft.has_slot("aperture") or draft.has_slot("pitch"):
         _beside_openings(draft, free, shape)
@@ -91,6 +94,14 @@ def _product(draft: Draft, chain: Item) -> None:
         "DDW",
     ):
         _lengths_only(draft, chain, free, shape)
+
+
+def _is_of_a_new_side(draft: Draft, free: list[Item]) -> bool:
+    """'warp 24 x .015 weft 110 x .010': the second product is the other direction's, and counts anew."""
+    if not free or free[0].side is None or not free[0].is_count_like:
+        return False
+    counted = [n.side for n in draft.all_numbers() if n.taken == "count"]
+    return free[0].side not in counted and None not in counted
 
 
 def _beside_counts(draft: Draft, chain: Item, free: list[Item], shape: str) -> None:
@@ -164,9 +175,9 @@ def _wire_or_opening(draft: Draft, number: Item) -> list[Option]:
         for w in wires
     ]
     unit = None if number.is_length else "mm"
-    opening = Option(
-        f"opening {number.text}", (length_claim("aperture", [number], unit),), POSSIBLE, 2, sense="wire or opening"
-    )
+    again = tuple(length_claim("aperture", [a]) for a in number.restated if a.is_length)
+    claims = (length_claim("aperture", [number], unit), *again)
+    opening = Option(f"opening {number.text}", claims, POSSIBLE, 2, sense="wire or opening")
     if number.unit == "um":
         number.taken = "aperture"
         thin = [
@@ -375,7 +386,10 @@ def _two_lengths(draft: Draft, chain: Item, free: list[Item]) -> None:
 def _single(draft: Draft, number: Item) -> None:
     """A number alone, by what is known already: beside a count the wire, beside a wire the count or the opening."""
     shape = shape_of([number])
-    if shape == "G" and not _knows_wire(draft):
+    if number.unit == "hundredths":
+        if not _knows_wire(draft) and (draft.has_count or _states_opening(draft)):
+            hundredths(draft, "wire", [number])
+    elif shape == "G" and not _knows_wire(draft):
         take([number], "wire")
         draft.choices.append(gauge_options(draft, [number]))
     elif shape == "W" and not draft.has_count and not (draft.has_slot("aperture") or draft.has_slot("pitch")):
@@ -403,6 +417,10 @@ def _whole_alone(draft: Draft, number: Item) -> None:
     elif not _knows_wire(draft) and len(draft.numbers()) == 1 and draft.form is None:
         take([number], "count")
         options = [Option(f"{number.text} per inch", (claim,), USUAL, sense="sieve or count")]
+        if number.number.value in BARE_NUMBERS and draft.alloy is None:
+            options.append(
+                Option(f"alloy {number.text}, count not said", (), POSSIBLE, alloy=number.text, sense="alloy or count")
+            )
         if sieve := sieve_option(draft, number, POSSIBLE):
             options.append(sieve)
         draft.choices.append(options)

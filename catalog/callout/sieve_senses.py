@@ -25,7 +25,9 @@ def sieve_option(draft: Draft, number: Item, likelihood: Likelihood = USUAL) -> 
     if sieve is None:
         return None
     label = f"{'British mesh number' if british else 'sieve No.'} {name}"
-    notes: tuple[str, ...] = (f"{label}: opening {_mm(sieve.opening_mm)} and the standard's nominal wire {_mm(sieve.wire_mm)}",)
+    notes: tuple[str, ...] = (
+        f"{label}: opening {_mm(sieve.opening_mm)} and the standard's nominal wire {_mm(sieve.wire_mm)}",
+    )
     if british:
         notes += ("British mesh numbers are from memory",)
     standard = f"BS 410 mesh number {name}" if british else f"sieve designation No. {name}"

@@ -1,5 +1,6 @@
 """Rules for what is ordered: rolls, panels, discs, width and length, pieces, square metres."""
 
+import re
 from fractions import Fraction
 
 from catalog.callout.draft import Draft
@@ -7,10 +8,13 @@ from catalog.callout.items import Item
 from catalog.callout.measures import peek
 from catalog.callout.reading import Form
 from catalog.callout.structure import is_times
-from catalog.units import MM_PER_UNIT, as_thousands
+from catalog.units import MM_PER_UNIT
 
 WIDEST_ROLL_MM = 4000
 LEAST_SIZE_MM = 100
+LEAST_SIDE_MM = 25
+THOUSANDS = re.compile(r"[1-9]\d{0,2}[.,]\d{3}")
+"""A point or comma before three digits, which in a size divides thousands."""
 INCH_WIDTHS = range(10, 121)
 FEET_LENGTHS = (25, 30, 50, 75, 100, 150, 200, 300)
 FORM_UNITS = ("ft", "m", "M")
@@ -55,12 +59,12 @@ class _Size:
 
 
 def size_mm(number: Item, unit: str | None = None) -> Fraction:
-    """A size in mm; '1,000 mm' is a metre, since no roll is a millimetre wide."""
+    """A size in mm; '1,000 mm' and '1.220 mm' are thousands, since no roll is a millimetre wide."""
     assert number.number
     value = number.number
     scale = MM_PER_UNIT[{"M": "m"}.get(number.unit or "", number.unit) or unit or "mm"]
-    if value.kind == "grouped" and value.value * scale < LEAST_SIZE_MM:
-        value = as_thousands(value)
+    if scale == 1 and value.value < LEAST_SIDE_MM and THOUSANDS.fullmatch(value.written):
+        return value.value * 1000
     return value.value * scale
 
 
@@ -71,7 +75,7 @@ def _quantities(draft: Draft, size: _Size) -> None:
             number.taken, size.kind = "form", number.system
             size.quantity = int(number.number.value)
     for word in draft.terms("form"):
-        at = draft.items.index(word)
+        at = word.at
         before = peek(draft.items, at - 1)
         if word.text.lower() in QUANTITY_WORDS:
             _take_quantity(size, next((i for i in draft.items[at + 1 : at + 4] if i.is_number), None))
@@ -142,15 +146,19 @@ def _products_of_sizes(draft: Draft, size: _Size) -> None:
             if named and len(members) == 1 and size_like(members[0]):
                 _set_pair(draft, size, named[0], members[0])
             continue
-        other = members[at + 1] if at == 0 and len(members) > 1 else members[at - 1] if at else None
+        behind = members[at + 1] if at + 1 < len(members) else None
+        other = behind if at == 0 or (behind and behind.unit in FORM_UNITS) else members[at - 1]
         if other is not None and other.slot in (None, "width", "length") and other.unit != "gauge":
-            _set_pair(draft, size, *((members[at], other) if at == 0 else (other, members[at])))
+            _set_pair(draft, size, *((members[at], other) if other is behind else (other, members[at])))
         elif chain.members.index(members[at]) and chain.members[chain.members.index(members[at]) - 1].taken == "form":
             members[at].taken, size.length = "form", size.length or size_mm(members[at])
 
 
 def _is_metres(members: list[Item], member: Item) -> bool:
-    return any(m is not member and m.unit in ("M", "m", "mm") for m in members)
+    """True where M stands beside another size: in '60M x .0075 x 1.22M x 30M' the first is the count."""
+    at = members.index(member)
+    around = (members[at - 1] if at else None, members[at + 1] if at + 1 < len(members) else None)
+    return any(m is not None and m.unit in ("M", "m", "mm") for m in around)
 
 
 def size_like(number: Item) -> bool:
@@ -183,7 +191,7 @@ def _beside_goods(draft: Draft, size: _Size) -> None:
     """'panel 1200 x 2400', '24 x 36 in panels', 'disc 350 mm', '12 discs Ø 350': sizes beside the word for the goods."""
     for word in (*draft.terms("form"), *(i for i in draft.items if i.is_number and i.unit == "pieces")):
         kind = word.senses.get("form") or word.system
-        at = draft.items.index(word)
+        at = word.at
         near = [
             i
             for n in (at + 1, at - 1, at + 2, at - 2)

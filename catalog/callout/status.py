@@ -48,6 +48,8 @@ def status_of(draft: Draft, decided: Decided, text: str) -> Understanding:
 
 def _is_empty(reading: Reading) -> bool:
     sides = (reading.warp, reading.weft)
+    if reading.label.startswith("alloy "):
+        return False
     return (
         reading.rating is None
         and all(x is None for s in sides for x in (s.pitch, s.wire, s.aperture))
@@ -61,7 +63,8 @@ def _only_size(reading: Reading) -> bool:
 
 def _nothing(draft: Draft, text: str) -> Understanding:
     """No figure of a cloth in the text: an unknown part number or a date is a question, all else is out of scope."""
-    asks = [p for p in draft.problems if "part number" in p.message or p.code == "E_DATE"]
+    only_figures = bool(draft.all_numbers()) and all(i.kind not in ("word", "term") for i in draft.items)
+    asks = [p for p in draft.problems if "part number" in p.message or p.code == "E_DATE" or only_figures]
     missing = tuple(draft.missing)
     if asks:
         return Understanding(
@@ -213,7 +216,7 @@ def _check_mass(draft: Draft, reading: Reading) -> None:
     shown = ", ".join(f"{m:.2g} in {name}" for name, m in list(masses.items())[:1] if m)
     draft.problem(
         "E_INCONSISTENT",
-        f"A mass of {stated:.3g} kg/m² fits {'the alloy' if draft.alloy else 'no common metal'}{' badly' if draft.alloy else ''}: the construction weighs {shown} kg/m².",
+        f"A mass of {stated:.3g} kg/m² fits no {'cloth of the alloy' if draft.alloy else 'common metal'}: this construction weighs {shown}.",
         draft.mass,
     )
 

@@ -9,9 +9,39 @@ SPREADING = ("mm", "um", "in", "thou", "cm", "m", "ft", "%", "gauge", "/in", "/c
 
 def structured(items: list[Item]) -> list[Item]:
     """Apply the rules of structure in order."""
-    for rule in (_signed_numbers, _tolerances, _ranges, _products, _brackets, _equations):
+    for rule in (_article_numbers, _signed_numbers, _tolerances, _ranges, _products, _brackets, _equations):
         items = rule(items)
     return items
+
+
+def _article_numbers(items: list[Item]) -> list[Item]:
+    """What stands behind 'P/N', 'art. no.' or 'item' names an article: 'P/N 44-1027', 'item 000123'."""
+
+    def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
+        if not items[at].has("part number"):
+            return None
+        first = at + 1
+        while (sign := peek(items, first)) and (sign.text in ".:#-" or sign.has("number sign")):
+            first += 1
+        if not (head := peek(items, first)) or not _is_article(head, items[at].text):
+            return None
+        end = first + 1
+        while end < len(items) and items[end].glued and not is_separator(items[end]):
+            end += 1
+        return Item("code", head.text, items[at].start, items[end - 1].end, items[at].glued, taken="code"), end
+
+    return rewrite(items, rule)
+
+
+def _is_article(head: Item, word: str) -> bool:
+    """True for a bare number or code; behind weak words ('item', 'pos') only for one that is no count."""
+    if head.kind == "code":
+        return True
+    number = head.number if head.is_number and head.unit in (None, "designation") else None
+    if number is None or not number.is_integer:
+        return head.kind == "word" and len(word) > 4
+    long = len(number.written) >= 5 or number.written[0] == "0"
+    return long or word.lower() not in ("item", "pos", "line", "code", "ref", "part", "po")
 
 
 def is_separator(item: Item | None) -> bool:
@@ -31,7 +61,8 @@ def _signed_numbers(items: list[Item]) -> list[Item]:
         sign, number, before = items[at], peek(items, at + 1), peek(items, at - 1)
         if sign.text not in "+-" or not number or not number.is_number or not number.glued:
             return None
-        follows = before is not None and before.is_number and before.bound in ("passing", "held")
+        earlier = peek(items, at - 2) if before is not None and before.text == "/" else before
+        follows = earlier is not None and earlier.is_number and earlier.bound in ("passing", "held")
         if (sign.glued and not follows) or (before and before.text == "±"):
             return None
         number.bound = "passing" if sign.text == "-" else "held"
@@ -53,9 +84,10 @@ def _tolerances(items: list[Item]) -> list[Item]:
         if sign.has("slot") and off and off.text == "±" and behind and behind.is_number:
             _label(number, sign)
             return _tolerance(number, behind, behind), at + 4
-        minus = peek(items, at + 3) if peek(items, at + 2) and items[at + 2].text == "/" else off
+        skip = 3 if off and off.text == "/" else 2
+        minus = peek(items, at + skip)
         if sign.is_number and sign.bound == "held" and minus and minus.is_number and minus.bound == "passing":
-            return _tolerance(number, sign, minus), items.index(minus, at) + 1
+            return _tolerance(number, sign, minus), at + skip + 1
         return None
 
     return rewrite(items, rule)
@@ -127,35 +159,60 @@ def _products(items: list[Item]) -> list[Item]:
             at += 1
             continue
         members, joins, end = _members(items, at)
-        out.append(_chain(members, joins) if joins else items[at])
+        if joins == ["/"] and _is_said_twice(*members):
+            members[0].restated.append(members[1])
+            out.append(join(members[0], members[1], members[0]))
+        else:
+            out.append(_chain(members, joins) if joins else items[at])
         at = end if joins else at + 1
     return out
+
+
+def _is_said_twice(one: Item, other: Item) -> bool:
+    """'.0075\"/0.19 mm' is one length in two units."""
+    if not (one.is_length and other.is_length) or (one.unit in ("in", "thou")) == (other.unit in ("in", "thou")):
+        return False
+    first, second = one.length().mm, other.length().mm
+    return first > 0 and 94 * first < 100 * second < 106 * first
 
 
 def _members(items: list[Item], at: int) -> tuple[list[Item], list[str], int]:
     members, end = [items[at]], at + 1
     joins: list[str] = []
     while True:
-        label = items[end] if end < len(items) and items[end].has("slot") else None
-        times = peek(items, end + 1 if label else end)
+        labels = _labels(items, end)
+        times = peek(items, end + len(labels))
         if not (is_times(times) or (times and times.text == "/" and times.kind == "sign")):
             return members, joins, end
-        behind = end + (2 if label else 1)
-        inner = items[behind] if behind < len(items) and items[behind].has("slot") else None
-        number = peek(items, behind + 1 if inner else behind)
+        behind = end + len(labels) + 1
+        inner = _labels(items, behind)
+        number = peek(items, behind + len(inner))
         if number is None or not number.is_number or number.bound:
             return members, joins, end
-        _label(members[-1], label)
-        _label(number, inner)
+        for label in labels:
+            _label(members[-1], label)
+        for label in inner:
+            _label(number, label)
         members.append(number)
         joins.append("/" if times and times.text == "/" else "x")
-        end = behind + (2 if inner else 1)
+        end = behind + len(inner) + 1
 
 
-def _label(number: Item, label: Item | None) -> None:
-    if label is not None:
-        number.slot = number.slot or label.senses["slot"]
-        join(min(number, label, key=_start), max(number, label, key=_start), number)
+def _labels(items: list[Item], at: int) -> list[Item]:
+    """Up to two words that name a figure or a direction."""
+    found: list[Item] = []
+    while len(found) < 2 and at + len(found) < len(items):
+        word = items[at + len(found)]
+        if not (word.has("slot") or word.has("side")):
+            break
+        found.append(word)
+    return found
+
+
+def _label(number: Item, label: Item) -> None:
+    number.slot = number.slot or label.senses.get("slot")
+    number.side = number.side or label.senses.get("side")
+    join(min(number, label, key=_start), max(number, label, key=_start), number)
 
 
 def _start(item: Item) -> int:

@@ -9,6 +9,11 @@ from catalog.callout.lexicon import atoms, fold, is_word, longest
 from catalog.callout.ocr import likely_word
 from catalog.units import Number, parse_number
 
+POINTED = re.compile(r"(?<![\w.,])0?\.\d")
+"""A decimal point: a comma between digits then parts the items of a list, unless decimals with a comma are there too."""
+COMMAED = re.compile(r"(?<![\d.,])0,\d")
+GROUP = re.compile(r"\d{1,3}(?:,\d{3})+(?:\.\d+)?")
+SIZE_UNIT = re.compile(r"\s?(?:mm|lbs?|pcs|m|ft)\b", re.IGNORECASE)
 INCH_PARTS = (2, 4, 8, 16, 32, 64)
 NUMBER = re.compile(
     r"""(?:(?P<mixed>\d{1,2}(?:[ ]|-)\d{1,2}/(?:2|4|8|16|32|64)(?![\d.,]\d|\d))
@@ -32,11 +37,12 @@ LETTERS = re.compile(r"[^\W\d_]+")
 def tokenize(text: str) -> list[Item]:
     """Cut repaired *text* into items."""
     row = atoms(fold(text))
+    lists = bool(POINTED.search(text)) and not COMMAED.search(text)
     items: list[Item] = []
     index = 0
     while index < len(row):
         start = row[index][1]
-        item = _item_at(text, row, index)
+        item = _item_at(text, row, index, lists)
         item.glued = start > 0 and not text[start - 1].isspace()
         items.append(item)
         end = item.end
@@ -47,7 +53,7 @@ def tokenize(text: str) -> list[Item]:
     return items
 
 
-def _item_at(text: str, row: list[tuple[str, int, int]], index: int) -> Item:
+def _item_at(text: str, row: list[tuple[str, int, int]], index: int, lists: bool) -> Item:
     """What stands at one place: a name before a number, a number before a word, the longest phrase of all."""
     key, start, end = row[index]
     at_edge = start == 0 or not (text[start - 1].isalnum() or text[start - 1] == "_")
@@ -55,7 +61,7 @@ def _item_at(text: str, row: list[tuple[str, int, int]], index: int) -> Item:
         return Item("code", code.group(), start, code.end())
     if at_edge and (named := DESIGNATION.match(text, start)):
         return _designation(named)
-    if (key[-1:].isdecimal() or key in ".,") and (item := _number(text, start)):
+    if (key[-1:].isdecimal() or key in ".,") and (item := _number(text, start, lists)):
         return item
     if found := longest(row, index):
         stop = row[found[0] - 1][2]
@@ -73,15 +79,17 @@ def _is_spoken(code: str) -> bool:
     return any(len(word) > 2 and is_word(word) for word in LETTERS.findall(code))
 
 
-def _number(text: str, start: int) -> Item | None:
+def _number(text: str, start: int, lists: bool) -> Item | None:
     found = NUMBER.match(text, start)
-    if not found or (found.group()[0] in ".," and start and (text[start - 1].isdecimal() or text[start - 1] == ".")):
+    if not found or (found.group()[0] in ".," and start and not _may_lead(found.group()[0], text[start - 1])):
         return None
     if both := FEET_INCHES.match(text, start):
         return _feet(both)
     written, kind = found.group(), found.lastgroup
     if kind in ("mixed", "vulgar") and not _is_inch_part(written):
         written = re.match(r"\d+", written).group()  # type: ignore[union-attr]
+    if lists and "," in written[1:] and not (GROUP.fullmatch(written) and SIZE_UNIT.match(text, found.end())):
+        written = written.partition(",")[0]
     if kind == "aught":
         return Item("number", written, start, found.end(), unit="aught")
     number = parse_number(written)
@@ -91,6 +99,11 @@ def _number(text: str, start: int) -> Item | None:
     if kind == "hundredths":
         item.unit = "hundredths"
     return item
+
+
+def _may_lead(point: str, before: str) -> bool:
+    """A point may stand for '0.' behind a letter, a comma only behind a space or sign: ',304' in a list is 304."""
+    return not before.isdecimal() and before != "." and (point == "." or not before.isalpha())
 
 
 def _is_inch_part(written: str) -> bool:
@@ -116,6 +129,10 @@ def _word(text: str, start: int, end: int) -> Item:
             found = longest(atoms(meant), 0)
             assert found
             return Item("term", seen, start, start + len(seen), senses=found[1] | {"mended": meant})
+    if text[end - 1] in "xX" and text[end : end + 2].strip(".")[:1].isdecimal() and is_word(text[start : end - 1]):
+        found = longest(atoms(fold(text[start : end - 1])), 0)
+        assert found
+        return Item("term", text[start : end - 1], start, end - 1, senses=dict(found[1]))
     if LETTERS.fullmatch(text[start:end]):
         return Item("word", text[start:end], start, end)
     return Item("sign", text[start:end], start, end)

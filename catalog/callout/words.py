@@ -20,6 +20,9 @@ WITHDRAWN = re.compile(r"DIN\s?418[89]|BS\s?410|RR-W-360|DIN\s?1171")
 def words(draft: Draft, text: str) -> None:
     """Apply every rule for words."""
     draft.is_metric_tongue = bool(FOREIGN.search(text))
+    for item in draft.items:
+        if item.has("mended"):
+            draft.note(f"'{item.text}' was read as '{item.senses['mended']}'")
     for rule in (
         _certificates,
         _not_woven,
@@ -42,7 +45,7 @@ def _certificates(draft: Draft) -> None:
         draft.certificate = kind.group().replace(",", ".") if kind else None
         item.taken = "certificate"
     for word in draft.terms("certificate word"):
-        at = draft.items.index(word)
+        at = word.at
         for near in (at - 1, at + 1, at - 2, at + 2, at + 3):
             number = peek(draft.items, near)
             if (
@@ -58,17 +61,18 @@ def _certificates(draft: Draft) -> None:
 
 
 def _negated(draft: Draft, item: Item) -> bool:
-    before = peek(draft.items, draft.items.index(item) - 1)
+    before = peek(draft.items, item.at - 1)
     return before is not None and before.has("negation") and not before.has("number sign")
 
 
 def _not_woven(draft: Draft) -> None:
     """Welded, knitted, expanded, perforated goods are no woven cloth; 'not welded' says that it is."""
     for item in draft.terms("not woven"):
-        kind, at = item.senses["not woven"], draft.items.index(item)
+        kind, at = item.senses["not woven"], item.at
         item.taken = "kind of goods"
         after = peek(draft.items, at + 1)
         if _negated(draft, item):
+            draft.items[at - 1].taken = "kind of goods"
             draft.note(f"not {kind}, as the text says")
         elif after is not None and re.match(r"edge|frame|seam|border|selv|ends|rand|naht", after.text, re.IGNORECASE):
             draft.note(f"{item.text} {after.text}: made up after weaving, not part of the cloth")
@@ -82,7 +86,9 @@ def _not_metal(draft: Draft) -> None:
     """Nylon, polyester, silk, glass: the cloth isn't of metal. 'PVC coated' is a finish and read as such."""
     for item in draft.terms("not metal"):
         item.taken = "material"
-        if not _negated(draft, item):
+        if _negated(draft, item):
+            draft.items[item.at - 1].taken = "material"
+        else:
             message = f"'{item.text}' is no metal: only wire cloth is in this catalogue."
             draft.outside = draft.outside or Problem("E_NOT_METAL", message, item.start)
 

@@ -101,7 +101,7 @@ GRADES: dict[str, str] = {
 """Grade → its names. TBC is bolting cloth or 'to be confirmed'."""
 
 PRODUCTS = (
-    "wire cloth, wirecloth, wire-cloth, wire mesh, wiremesh, wire screen, wire screening, woven wire, woven wire cloth, woven wire mesh, woven mesh, woven,"
+    "weave, wire cloth, wirecloth, wire-cloth, wire mesh, wiremesh, wire screen, wire screening, woven wire, woven wire cloth, woven wire mesh, woven mesh, woven,"
     " woven wire screen, woven cloth, cloth, screen, screens, screening, scrn, screen cloth, gauze, wire gauze, wire fabric,"
     " netting woven, fabric, metal cloth, metal fabric, metallic cloth, square mesh, square weave, square woven, square square, sq, sq mesh,"
     " sq weave, sqm weave, industrial wire cloth, space cloth, space screen, vibrating screen, strainer, strainer mesh, wire netting, cloth wire,"

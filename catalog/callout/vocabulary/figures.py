@@ -2,11 +2,11 @@
 # ruff: noqa: E501
 
 SLOTS: dict[str, str] = {
-    "mesh": "mesh, meshes, msh, maglia, maglie, siebmaschen, malla, mallas",
+    "mesh": "mesh, meshes, msh, maglia, maglie, siebmaschen, malla, mallas, paso, paso de malla",
     "count": (
         "count, counts, mesh count, per inch mesh, mesh per inch, meshes per inch, mesh/inch, mesh/in, wires per inch, wpi, mpi, epi,"
         " openings per inch, holes per inch, maschen, maschenzahl, maschen pro zoll, fadenzahl, thread count,"
-        " number of wires, nombre de mailles, numero de numero maglie, mallas por pulgada, mailles au pouce,"
+        " number of wires, nombre de mailles, numero de mallas, numero de maglie, numero maglie, mallas por pulgada, mailles au pouce,"
         " mailles par pouce, maglie per pollice, maschen je zoll, maschen/zoll"
     ),
     "aperture": (
@@ -17,15 +17,15 @@ SLOTS: dict[str, str] = {
         " screen opening, light opening, pore, pores, sq hole, square hole, square holes,"
         " maschenweite, lichte maschenweite, lichte weite, mw, lw, nennmaschenweite, maschenoffnung, offnung, siebweite,"
         " maille, mailles, ouverture, ouverture de maille, vide de maille, vide, ouverture nominale, jour,"
-        " luz, luz de luz de la luz abertura, apertura, apertura de abertura de malha, paso de malla,"
+        " luz, luz de malla, luz de la malla, luz malla, abertura, abertura de malla, apertura, apertura de malla, abertura de malha,"
         " luce, luce netta, luce maglia, luce di maglia, apertura maglia, apertura di maglia, apertura netta,"
-        " maaswijdte, размер ячейки, ячейка, ячейки, яч, sloteness, slot, slots, slotted, slotted opening, slot opening,"
+        " maaswijdte, размер ячейки, ячейка, ячейки, яч, slot, slots, slotted, slotted opening, slot opening,"
         " oblong opening, slot width"
     ),
     "pitch": (
         "pitch, c/c, cc, c-c, c to c, ctc, o/c, oc, o c, on center, on centers, on centre, on centres, centres, centers, crs, ctrs,"
         " center to center, centre to centre, centre-to-centre, center-to-center, m/m, teilung, mittenabstand,"
-        " pas, entraxe, entre axes, paso, entre centros, passo, interasse, шаг"
+        " pas, entraxe, entre axes, entre centros, passo, interasse, шаг"
     ),
     "wire": (
         "wire, wires, wire dia, wire diam, wire diameter, wire diameters, wire size, wire thickness, wire thk, wd dia,"
@@ -36,7 +36,7 @@ SLOTS: dict[str, str] = {
         " hilo, hilos, alambre, diametro, diametro de hilo, diametro del hilo, diametro de alambre, diametro alambre,"
         " diametro del alambre, hilo Ø, calibre de hilo,"
         " filo, fili, diametro filo, diametro del filo, filo Ø, Ø filo, draad, draaddikte, проволока, проволоки, диаметр,"
-        " диаметр проволоки, strand, Ø draht, Ø hilo, thread, thread dia, wire rod"
+        " диаметр проволоки, strand, kettdraht, kettdrahte, fil de chaine, schussdraht, schussdrahte, fil de trame, Ø draht, Ø hilo, thread, thread dia, wire rod"
     ),
     "open_area": (
         "open area, openarea, oa, free area, free open area, open area pct, percent open area, percentage open area, open screen area,"
@@ -49,7 +49,7 @@ SLOTS: dict[str, str] = {
         " massa, вес, масса, weight per area"
     ),
     "width": (
-        "width, widths, wide, wid, roll width, breite, breit, br, rollenbreite, largeur, laize, lze, de ancho,"
+        "width, widths, wide, wid, roll width, breite, breit, br, rollenbreite, largeur, laize, lze, de large, de ancho, ancho,"
         " anchura, de ancho, larghezza, largo, breedte, ширина"
     ),
     "length": (
@@ -61,9 +61,9 @@ SLOTS: dict[str, str] = {
 """Figure → the words for it. 'mesh' before or after a length may mean opening or pitch: it is never a plain count."""
 
 SIDES: dict[str, str] = {
-    "warp": "warp, warps, warp wire, warp wires, kette, kettdraht, kettdrahte, in kette, chaine, fil de chaine, urdimbre, ordito, основа",
+    "warp": "warp, warps, kette, kettdraht, kettdrahte, in kette, chaine, fil de chaine, urdimbre, ordito, основа",
     "weft": (
-        "weft, wefts, weft wire, weft wires, shute, shoot, fill, filling, woof, shute wire, shute wires, shoot wire, fill wire,"
+        "weft, wefts, shute, shoot, fill, filling, woof,"
         " schuss, schussdraht, schussdrahte, im schuss, trame, fil de trame, trama, уток"
     ),
 }

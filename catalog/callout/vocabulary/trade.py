@@ -65,11 +65,11 @@ CERTIFICATES = (
 
 LEAST = (
     "min, minimum, mindestens, mind, at least, not less than, no less than, not under, not below, nlt, or more, or over, or larger, or greater, and up, and over, and above,"
-    " minimal, au moins, au minimum, minimo, como minimo, al menos, almeno, non meno di, no menos de, pas moins de, nicht weniger als, nicht unter, minste, не менее, or bigger, or wider"
+    " minimal, au moins, au minimum, minimo, como minimo, al menos, almeno, non meno di, no menos de, pas moins de, nicht weniger als, nicht unter, minste, mini, mini., не менее, or bigger, or wider"
 )
 MOST = (
     "max, maximum, hochstens, at most, not more than, no more than, not over, not above, not exceeding, not to exceed, must not exceed, nmt, up to, or less, or under, or smaller,"
-    " maximal, au plus, au maximum, maximo, como maximo, al massimo, massimo, non piu di, no mas de, pas plus de, nicht mehr als, nicht uber, bis zu, не более, or below, or narrower"
+    " maximal, au plus, au maximum, maximo, como maximo, al massimo, massimo, non piu di, maxi, no mas de, pas plus de, nicht mehr als, nicht uber, bis zu, не более, or below, or narrower"
 )
 OVER = "more than, greater than, over, above, exceeding, larger than, bigger than, wider than, mehr als, grosser als, uber, plus de, superieur a, mas de, mayor que, piu di, maggiore di, ab"
 UNDER = "less than, under, below, smaller than, narrower than, weniger als, kleiner als, unter, moins de, inferieur a, menos de, menor que, meno di, minore di"
