@@ -27,7 +27,8 @@ def create_file(path: Path, with_demo: bool) -> None:
     except OSError as error:
         raise StoreError(_why(path, error), str(path)) from error
     try:
-        _fill(draft, with_demo)
+        with engines.explained(str(path)):
+            _fill(draft, with_demo)
         _publish(draft, path)
     finally:
         for leftover in ("", "-wal", "-shm", "-journal"):
@@ -44,9 +45,8 @@ def _why(path: Path, error: OSError) -> str:
 def _fill(draft: Path, with_demo: bool) -> None:
     engine = engines.sqlite_engine(draft)
     try:
-        with engines.explained(str(draft)):
-            fill(engine, with_demo)
-            sign(engine, logs_ahead=not is_on_shared_folder(draft))
+        fill(engine, with_demo)
+        sign(engine, logs_ahead=not is_on_shared_folder(draft))
     finally:
         engine.dispose()
 

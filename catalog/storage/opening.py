@@ -7,10 +7,9 @@ from sqlalchemy import Engine, text
 from sqlalchemy.exc import ProgrammingError
 
 from catalog.errors import StoreError
-from catalog.figures import DERIVATION_VERSION
 from catalog.storage.engine import TIMEOUT_S, explained, sqlite_engine, url_engine
 from catalog.storage.inspecting import access, check_file
-from catalog.storage.migrating import HEAD
+from catalog.storage.migrating import DERIVATION, HEAD
 from catalog.storage.store import Store
 
 SQLITE_URL = "sqlite:///"
@@ -84,7 +83,7 @@ def _checked(store: Store, engine: Engine) -> Store:
                 f"{revision}, this program knows {HEAD}): update the program.",
                 store.location,
             )
-        if revision < HEAD or derivation != str(DERIVATION_VERSION):
+        if revision < HEAD or derivation != str(DERIVATION):
             _bring_up_to_date(store, engine, revision)
     except BaseException:
         store.close()

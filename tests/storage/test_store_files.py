@@ -10,9 +10,10 @@ import pytest
 from store_building import fill_file, make_cloth, make_lot
 
 from catalog.errors import ReadOnlyStoreError, StoreError
+from catalog.figures import DERIVATION_VERSION
 from catalog.search.reader import Filters, Point
 from catalog.storage.inspecting import is_on_shared_folder
-from catalog.storage.migrating import HEAD, configuration
+from catalog.storage.migrating import DERIVATION, HEAD, configuration
 from catalog.storage.opening import open_store
 
 SIXTY = make_cloth("sixty", ("127/300", "1651/10000"))
@@ -143,6 +144,10 @@ def test_an_opened_store_logs_ahead_and_leaves_one_file_when_closed(path: Path) 
     assert os.listdir(path.parent) == [path.name]
 
 
+def test_the_known_derivation_is_that_of_the_figures() -> None:
+    assert DERIVATION == DERIVATION_VERSION
+
+
 def test_the_known_revision_is_the_newest_migration() -> None:
     from alembic.script import ScriptDirectory
 
@@ -166,7 +171,8 @@ def test_opening_a_store_imports_neither_alembic_nor_the_orm(path: Path) -> None
         f"with open_store({str(path)!r}) as store:\n"
         "    store.nearest(Point(warp_aperture_mm=0.25, weft_aperture_mm=0.25), 50)\n"
         "    store.lots(['sixty'])\n"
-        "print([m for m in ('alembic', 'sqlalchemy.orm', 'catalog.storage.tables') if m in sys.modules])"
+        "late = ('alembic', 'sqlalchemy.orm', 'catalog.storage.tables', 'catalog.physics')\n"
+        "print([name for name in late if name in sys.modules])"
     )
     done = subprocess.run([sys.executable, "-c", code], capture_output=True, text=True, check=True)
     assert done.stdout.strip() == "[]"
