@@ -3,9 +3,8 @@
 from collections.abc import Iterator
 from html import escape
 
-from catalog.report.drawing_vector import Bar, Disc, Drawing, Panel, Ribbon, Shape
+from catalog.report.drawing_vector import INK, Bar, Disc, Drawing, Panel, Ribbon, Shape
 
-INK = {"warp": "#8aa0b4", "weft": "#d9c9a3"}
 EDGE = "#333"
 LINE = 0.18
 GAP, TITLE, BAR = 6.0, 5.0, 8.0

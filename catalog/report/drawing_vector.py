@@ -18,6 +18,8 @@ MOST_WIRES = 60
 PREFERRED = tuple(step * 10.0**power for power in range(-4, 4) for step in (1, 2, 5))
 """Scales of ISO 5455 (from memory): 1, 2, 5 and their decimal multiples."""
 STEPS = 12
+INK = {"warp": "#8496a8", "weft": "#e4dcc8"}
+"""Colours that stay apart in black and white: warp dark, weft light."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -84,11 +86,11 @@ class Drawing:
 
     @property
     def scale_words(self) -> str:
-        """'Scale 20 : 1, bar 1 mm (0.0394 in)'."""
+        """'Scale 20 : 1, bar 1 mm (0.0394 in); warp dark, weft light'."""
         if not self.scale:
             return "Nothing to draw"
         ratio = f"{self.scale:g} : 1" if self.scale >= 1 else f"1 : {1 / self.scale:g}"
-        return f"Scale {ratio}, bar {self.bar_mm:g} mm ({self.bar_mm / 25.4:.3g} in)"
+        return f"Scale {ratio}, bar {self.bar_mm:g} mm ({self.bar_mm / 25.4:.3g} in); warp dark, weft light"
 
 
 def draw(cloths: tuple[tuple[str, Construction | None], ...]) -> Drawing:

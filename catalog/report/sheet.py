@@ -162,7 +162,7 @@ def _order(target: Target, details: Details) -> Iterator[Line]:
     purposes = ", ".join(purpose.value for purpose in target.purposes)
     yield Line("Use", tame(details.use) or TO_FILL_IN)
     yield Line("Purpose", purposes or "not stated: retain and pass side by side")
-    yield Line("Quantity", f"{quantity}; no more than this")
+    yield Line("Quantity", quantity if quantity == TO_FILL_IN else f"{quantity}; no more than this")
     yield Line("Valid until", _day(details.valid_until) or TO_FILL_IN)
     yield Line("Asked for", details.kind.words)
     if target.certificate:

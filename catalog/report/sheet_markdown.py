@@ -7,7 +7,7 @@ from catalog.report.fingerprint import grouped
 from catalog.report.sheet import DEMO, TO_FILL_IN, Line, Sheet
 
 MARKUP = re.compile(r"([\\`*_{}\[\]<>#|~&!$@])")
-LEADING = re.compile(r"^(\s*)([-+=]|\d+(?=[.)]))")
+LEADING = re.compile(r"^(\d*)([-+=.)])(?=[-=]*(?:\s|$))")
 LINKED = re.compile(r"(?i)\b(https?|ftp|mailto|xmpp)(:)|\b(www)(\.)")
 
 
@@ -20,7 +20,7 @@ def escaped(text: str) -> str:
     """*text* so that Markdown shows it as it is: no emphasis, tag, table, list or link comes of it."""
     shown = MARKUP.sub(r"\\\1", text)
     shown = LINKED.sub(lambda m: f"{m[1] or m[3]}\\{m[2] or m[4]}", shown)
-    return LEADING.sub(lambda m: f"{m[1]}\\{m[2]}" if not m[2].isdigit() else m[0] + "\\", shown)
+    return LEADING.sub(r"\1\\\2", shown)
 
 
 def _lines(sheet: Sheet) -> Iterator[str]:
@@ -49,7 +49,7 @@ def _line(line: Line) -> str:
 
 
 def _blank(text: str) -> str:
-    return escaped(text or TO_FILL_IN)
+    return escaped(text) if text.strip("_") else TO_FILL_IN
 
 
 def _source(source: str) -> str:
@@ -64,11 +64,11 @@ def _table(names: Sequence[str], cells: Iterable[Sequence[str]]) -> Iterator[str
     yield f"| {' | '.join(names)} |"
     yield f"|{'---|' * len(names)}"
     for row in cells:
-        yield f"| {' | '.join(escaped(cell) for cell in row)} |"
+        yield f"| {' | '.join(cell if cell == TO_FILL_IN else escaped(cell) for cell in row)} |"
 
 
 def _comparison(sheet: Sheet) -> Iterator[str]:
-    names = ("", "Required", "Offered", "Difference", "Limit", "What it hurts")
+    names = ("Property", "Required", "Offered", "Difference", "Limit", "What it hurts")
     cells = ((r.name, r.required, r.offered, r.difference, r.limit, r.hurts) for r in sheet.rows)
     return _table(names, cells)
 

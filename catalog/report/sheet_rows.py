@@ -13,6 +13,8 @@ from catalog.search.wording import both, pct, points, signed_pct
 from catalog.target import Need, Purpose, Target
 
 NOT_ASKED = "not asked"
+LEAST_POINTS = Fraction(5, 100)
+"""Less than this is printed as 0.0 points."""
 MINUS = str.maketrans("-", "−")
 
 
@@ -168,7 +170,7 @@ def _open_area(c: Comparison, candidate: Candidate, purposes: tuple[Purpose, ...
     off = c.open_points
     if c.asked_open is None or off is None:
         return Row("Open area", NOT_ASKED, found)
-    hurts = _hurts(purposes, lambda purpose: off < 0 and purpose is Purpose.FLOW) if off else ""
+    hurts = _hurts(purposes, lambda purpose: off < 0 and purpose is Purpose.FLOW) if abs(off) >= LEAST_POINTS else ""
     return Row("Open area", pct(c.asked_open * 100), found, points(off), _limit(candidate, "open_area"), hurts)
 
 

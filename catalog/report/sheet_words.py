@@ -1,5 +1,6 @@
 """What a sheet says beside its figures: verdict, assumptions, deference; whole sentences."""
 
+import re
 from collections.abc import Iterator, Mapping
 
 from catalog.crossref import Answer
@@ -8,8 +9,8 @@ from catalog.search.candidate import Candidate, Verdict
 from catalog.target import Target
 
 VERDICTS: Mapping[Verdict, str] = {
-    Verdict.SAME: "the same, to rounding, in every figure asked",
-    Verdict.INTERCHANGEABLE: "interchangeable on the figures asked",
+    Verdict.SAME: "equal to rounding in every figure asked",
+    Verdict.INTERCHANGEABLE: "every difference lies within its limit, on the figures asked",
     Verdict.NEAR_SAFE: "near: differs to the harmless side, or in what the purpose isn't about",
     Verdict.NEAR_RISK: "near: differs to the side that hurts",
     Verdict.CANNOT_SAY: "can't be said on what is known: see what has to be asked",
@@ -20,6 +21,7 @@ DEFERENCE = (
     "the engineer responsible for the equipment, who signs for it; measure the roll before use. Local codes and the "
     "customer's specification come first."
 )
+UNIT = re.compile(r"_(mm|pct|kg_m2)$")
 HARM_SIDE = "The aperture lies to the side that hurts, within its limit: measure the roll."
 
 
@@ -58,9 +60,7 @@ def _assumed(target: Target) -> Iterator[str]:
 def _read(answer: Answer, target: Target) -> Iterator[str]:
     yield from (f"Read: {tame(note)}." for note in target.reading.notes)
     if target.reading.derived:
-        names = ", ".join(
-            name.replace("_mm", "").replace("_", " ").replace(".", " ") for name in target.reading.derived
-        )
+        names = ", ".join(UNIT.sub("", name).replace("_", " ").replace(".", " ") for name in target.reading.derived)
         yield f"Completed by arithmetic: {names}."
     others = [tame(other.reading.label) for other in answer.targets if other is not target]
     if others:
