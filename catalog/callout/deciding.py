@@ -45,10 +45,18 @@ def decide(draft: Draft) -> Decided:
     alive = [t for t in tried if t.fault is None and not t.made.clashes]
     best = min((t.made.rank for t in alive), default=0)
     alive = [t for t in alive if t.made.rank == best]
+    lost = [t.made for t in tried if t.made.clashes and t.fault is None and t.made.rank <= best and _is_usual(t)]
+    if lost and not any(_is_usual(t) for t in alive):
+        return _contradiction(draft, [m for m in lost if m.rank == min(x.rank for x in lost)], alive)
     if alive:
         return _survivors(draft, alive, [t for t in tried if t.fault and _is_worth_saying(t)], best)
     clashing = [t.made for t in tried if t.fault is None]
+    clashing = [made for made in clashing if made.rank == min(m.rank for m in clashing)]
     return _contradiction(draft, clashing) if clashing else _no_cloth(draft, tried)
+
+
+def _is_usual(tried: Tried) -> bool:
+    return tried.turned.likelihood is Likelihood.USUAL
 
 
 def _is_worth_saying(tried: Tried) -> bool:
@@ -62,9 +70,9 @@ def _survivors(draft: Draft, alive: list[Tried], ruled_out: list[Tried], rank: i
     turned = [t.turned for t in alive]
     done.readings = [_reading(draft, t.made, t.label, t.likelihood, weave=t.weave, notes=t.notes) for t in turned]
     done.readings += [_ruled_out(draft, t) for t in ruled_out]
-    asked = [t for t in turned if not t.is_quiet and not _is_customary(t)]
     sought = all(t.likelihood is Likelihood.POSSIBLE for t in turned)
-    usual_lost = [t for t in ruled_out if t.turned.likelihood is Likelihood.USUAL]
+    asked = [t for t in turned if not t.is_quiet and (sought or not _is_customary(t))]
+    usual_lost = [t for t in ruled_out if _is_usual(t)]
     done.must_ask = len(asked) > 1 or rank > 1 or (sought and bool(usual_lost))
     if done.must_ask and len(asked) < 2 and ruled_out and ruled_out[0].fault:
         draft.problem(ruled_out[0].fault.code, ruled_out[0].fault.message)
@@ -98,12 +106,13 @@ def _ruled_out(draft: Draft, tried: Tried) -> Reading:
     return _reading(draft, made, label, Likelihood.RULED_OUT, weave=weave, notes=(tried.fault.message,))
 
 
-def _contradiction(draft: Draft, clashing: Sequence[Combined]) -> Decided:
+def _contradiction(draft: Draft, clashing: Sequence[Combined], others: Sequence[Tried] = ()) -> Decided:
     """Figures that disagree beyond rounding: every repair is a reading, and the question shows them."""
     first = clashing[0]
     draft.problem("E_INCONSISTENT", clash_message(first.clashes[0]))
     repairs = [m for made in clashing[:4] for m in mend_clash(draft, made)]
     readings = _mended_readings(draft, repairs, Likelihood.USUAL)
+    readings += [_reading(draft, t.made, t.turned.label, Likelihood.POSSIBLE, t.turned.weave) for t in others]
     if not readings:
         readings = [
             _reading(draft, first, "as written", Likelihood.RULED_OUT, notes=(clash_message(first.clashes[0]),))

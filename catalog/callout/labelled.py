@@ -353,8 +353,8 @@ def _lengths(draft: Draft, slot: str, row: list[Item]) -> None:
             _restated(draft, slot, number)
     if row[0].unit == "hundredths" or row[-1].unit == "hundredths":
         _hundredths(draft, slot, row)
-    elif all(n.is_length for n in row):
-        draft.claims.append(length_claim(slot, row))
+    elif any(n.is_length for n in row):
+        draft.claims.append(length_claim(slot, row, next(n.unit for n in row if n.is_length)))
     else:
         draft.choices.append(unit_options(draft, slot, row))
 
@@ -481,6 +481,7 @@ def _settled(draft: Draft, row: list[Item], options: list[Option], stated: list[
         return [
             replace(
                 agreeing[0],
+                likelihood=USUAL,
                 label=f"gauge {gauge_name(row[0])}, settled by the diameter beside it",
                 notes=("the diameter beside the gauge settles its system",),
             )

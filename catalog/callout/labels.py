@@ -94,9 +94,9 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
 
 def _fits_ahead(last: Item, ahead: Item | None, slot: str) -> bool:
     """'0.5 mm wire 0.2 mm': between two lengths the wire is the thinner."""
-    if slot != "wire" or ahead is None or not (last.is_number and ahead.is_number) or ahead.slot or not ahead.is_length:
+    if slot != "wire" or ahead is None or not ahead.is_number or ahead.slot or not ahead.is_length:
         return False
-    return last.is_length and ahead.length().mm < last.length().mm
+    return _tail(last).is_length and ahead.length().mm < _tail(last).length().mm
 
 
 def _tail(item: Item) -> Item:
@@ -127,7 +127,8 @@ def _set(item: Item, slot: str, backwards: bool) -> None:
 
 
 def _alike(member: Item, before: Item, slot: str) -> bool:
-    if member.unit != before.unit and not (slot == "aperture" and member.is_count_like):
+    whole = member.is_count_like or before.is_count_like
+    if member.unit != before.unit and not (slot == "aperture" and whole):
         return False
     if slot in ("mesh", "count"):
         return member.is_count_like == before.is_count_like

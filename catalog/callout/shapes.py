@@ -62,8 +62,8 @@ def _product(draft: Draft, chain: Item) -> None:
     shape = shape_of(free)
     if _is_of_a_new_side(draft, free):
         _whole_numbers_first(draft, free, shape)
-    elif draft.has_count:
-        _beside_counts(draft, chain, free, shape)
+    elif draft.has_count or any(n.taken == "count" for n in draft.all_numbers()):
+        _beside_counts(draft, free, shape)
     elif draft.has_slot("aperture") or draft.has_slot("pitch"):
         _beside_openings(draft, free, shape)
     elif shape in ("WW", "WWD", "WWG", "WD", "WG", "WWDD", "WWL", "WL", "WF", "WWF", "DDG", "DG"):
@@ -104,35 +104,45 @@ def _is_of_a_new_side(draft: Draft, free: list[Item]) -> bool:
     return free[0].side not in counted and None not in counted
 
 
-def _beside_counts(draft: Draft, chain: Item, free: list[Item], shape: str) -> None:
-    """The count is known: one length is the wire (or the opening), two are the wires of warp and weft, or opening and wire."""
+def _beside_counts(draft: Draft, free: list[Item], shape: str) -> None:
+    """The count is known: one length is the wire (or the opening), two are opening and wire, or the two wires."""
     if len(free) == 1 and shape in "DLF":
         beside_a_count(draft, free[0])
-    elif len(free) == 2 and shape in ("DD", "LL", "FF") and not _knows_wire(draft):
-        take(free, "wire")
-        wires = (
-            unit_options(draft, "wire", free) if shape != "LL" else [Option("", (length_claim("wire", free),), USUAL)]
-        )
-        both = [] if draft.is_dutch else _opening_and_wire(draft, free, shape)
-        draft.choices.append([*wires, *both])
-    elif (shape == "GG" and not _knows_wire(draft)) or (len(free) == 1 and shape == "G" and not _knows_wire(draft)):
+    elif _knows_wire(draft):
+        return
+    elif shape in ("DD", "LL", "FF"):
+        _two_beside_counts(draft, free, shape)
+    elif shape in ("G", "GG"):
         take(free, "wire")
         draft.choices.append(gauge_options(draft, free))
 
 
-def _opening_and_wire(draft: Draft, free: list[Item], shape: str) -> list[Option]:
-    unit = preferred_unit(draft, free) if shape != "LL" else None
-    units = (unit,) if unit is None else ("mm", "in")
-    return [
+def _two_beside_counts(draft: Draft, free: list[Item], shape: str) -> None:
+    """Beside one count '2,0/0,9' is opening and wire again; beside two counts, and in filter cloth, the two wires."""
+    take(free, "wire")
+    wires = [Option("", (length_claim("wire", free),))] if shape == "LL" else unit_options(draft, "wire", free)
+    if draft.is_dutch or _has_two_counts(draft):
+        draft.choices.append(wires)
+        return
+    free[0].taken = "aperture"
+    units = (None,) if shape == "LL" else dict.fromkeys((preferred_unit(draft, free), "mm", "in"))
+    both = [
         Option(
             "opening and wire",
-            (length_claim("aperture", free[:1], u), length_claim("wire", free[1:], u)),
-            POSSIBLE,
-            is_inferred=u is not None,
+            (length_claim("aperture", free[:1], unit), length_claim("wire", free[1:], unit)),
+            rank=int(at > 0),
+            is_inferred=unit is not None,
+            notes=(f"{free[0].text}/{free[1].text}: no unit; taken as {unit}",) if unit else (),
             sense="wires or opening and wire",
         )
-        for u in units
+        for at, unit in enumerate(units)
     ]
+    named = [replace(w, label="wires of warp and weft", likelihood=POSSIBLE, rank=max(1, w.rank)) for w in wires]
+    draft.choices.append([*both, *named])
+
+
+def _has_two_counts(draft: Draft) -> bool:
+    return any(c.by_count and c.warp and c.weft and c.warp.mm != c.weft.mm for c in draft.claims)
 
 
 def beside_a_count(draft: Draft, number: Item) -> None:
@@ -218,6 +228,9 @@ def _whole_numbers_first(draft: Draft, free: list[Item], shape: str) -> None:
 
     Two alone are counts where a wire, a weave or a grade stands by, else they might be a panel's sides in inches.
     """
+    if shape == "WL" and _knows_wire(draft):
+        _opening_or_pitch(draft, free, None)
+        return
     wholes = [n for n in free if shape_of([n]) in "WD" and n is not free[-1]] if shape != "WW" else free
     if shape == "WWDD":
         wholes = free[:2]

@@ -63,8 +63,9 @@ def size_mm(number: Item, unit: str | None = None) -> Fraction:
     assert number.number
     value = number.number
     scale = MM_PER_UNIT[{"M": "m"}.get(number.unit or "", number.unit) or unit or "mm"]
-    if scale == 1 and value.value < LEAST_SIDE_MM and THOUSANDS.fullmatch(value.written):
-        return value.value * 1000
+    in_thousands = value.kind == "grouped" and number.unit in ("ft", "in")
+    if in_thousands or (scale == 1 and value.value < LEAST_SIDE_MM and THOUSANDS.fullmatch(value.written)):
+        return value.value * 1000 * scale
     return value.value * scale
 
 

@@ -9,7 +9,7 @@ from catalog.callout.lexicon import atoms, fold, is_word, longest
 from catalog.callout.ocr import likely_word
 from catalog.units import Number, parse_number
 
-POINTED = re.compile(r"(?<![\w.,])0?\.\d")
+POINTED = re.compile(r"(?<![\w.])0?\.\d")
 """A decimal point: a comma between digits then parts the items of a list, unless decimals with a comma are there too."""
 COMMAED = re.compile(r"(?<![\d.,])0,\d")
 GROUP = re.compile(r"\d{1,3}(?:,\d{3})+(?:\.\d+)?")

@@ -43,7 +43,7 @@ def senses_of_direction(draft: Draft, made: Combined) -> list[Turned]:
     other = Turned(
         _turn(made),
         f"{made.label or 'as written'}, turned",
-        Likelihood.USUAL if made.warp.aperture else Likelihood.POSSIBLE,
+        made.likelihood if made.warp.aperture else Likelihood.POSSIBLE,
         is_quiet=True,
     )
     return [as_written, other, *_gauge_behind(draft, made)]

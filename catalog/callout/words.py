@@ -208,4 +208,5 @@ def _kinds(draft: Draft) -> None:
     for item in draft.terms("hardware"):
         item.taken, draft.is_hardware = "kind of goods", True
     for item in draft.terms("product"):
+        draft.is_slotted = draft.is_slotted or bool(re.match(r"oblong|rectang", item.text, re.IGNORECASE))
         item.taken = "kind of goods"
