@@ -10,7 +10,7 @@ from catalog.construction import Weave
 from catalog.errors import InputError
 from catalog.search.candidate import Candidate, Finding, Verdict
 from catalog.search.cautions import cautions
-from catalog.search.judging import assess, describe, order
+from catalog.search.judging import Assessed, assess, describe, rank
 from catalog.search.pool import gather
 from catalog.search.reader import Reader
 from catalog.search.rules import HOUSE_RULES, HouseRules
@@ -61,13 +61,12 @@ def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> 
     understanding = callout.read(request.text)
     readings = _taken(understanding, request.reading) or readings_to_match(understanding)
     targets = tuple(_aim(reading, request, rules) for reading in readings)
-    judged = [_judge_all(target, reader, request, rules) for target in targets]
+    judged = [(target, _judge_all(target, reader, request, rules)) for target in targets]
     any_will_do = understanding.status is not Status.ASK
-    merged = _merge(targets, judged, any_will_do, rules)
-    shown = order([candidate for candidate, _ in merged])[: request.limit]
-    aimed = {candidate.cloth.id: target for candidate, target in merged}
-    lots = reader.lots([c.cloth.id for c in shown])
-    described = tuple(describe(aimed[c.cloth.id], c, lots.get(c.cloth.id, ()), rules) for c in shown)
+    merged = _merge(judged, any_will_do, rules)
+    shown = sorted(merged, key=lambda assessed: rank(assessed.candidate))[: request.limit]
+    lots = reader.lots([assessed.candidate.cloth.id for assessed in shown])
+    described = tuple(describe(one, lots.get(one.candidate.cloth.id, ()), rules) for one in shown)
     said = dict.fromkeys(line for target in targets for line in cautions(target, request.text))
     return Answer(request, understanding, targets, described, understanding.question, tuple(said))
 
@@ -112,39 +111,40 @@ def _aim(reading: Reading, request: Request, rules: HouseRules) -> Target:
     )
 
 
-def _judge_all(target: Target, reader: Reader, request: Request, rules: HouseRules) -> list[Candidate]:
+def _judge_all(target: Target, reader: Reader, request: Request, rules: HouseRules) -> list[Assessed]:
     found = gather(target, reader, request.limit, request.in_stock, rules)
     return [assess(target, cloth, distance, turned, rules) for cloth, distance, turned in found]
 
 
-Aimed = tuple[Candidate, Target]
-
-
 def _merge(
-    targets: Sequence[Target], judged: Sequence[Sequence[Candidate]], any_will_do: bool, rules: HouseRules
-) -> list[Aimed]:
+    judged: Sequence[tuple[Target, Sequence[Assessed]]], any_will_do: bool, rules: HouseRules
+) -> Sequence[Assessed]:
     """One candidate a cloth: accepted alternatives give the better verdict, open readings must agree."""
-    if len(targets) == 1:
-        return [(candidate, targets[0]) for candidate in judged[0]]
-    by_id = [{c.cloth.id: c for c in candidates} for candidates in judged]
-    every = {cid: c for found in reversed(by_id) for cid, c in found.items()}
+    if len(judged) == 1:
+        return judged[0][1]
+    by_id = [(target, {one.candidate.cloth.id: one for one in found}) for target, found in judged]
+    every = {cid: one.candidate for _, found in reversed(by_id) for cid, one in found.items()}
     merged = []
     for cid, known in every.items():
-        views = [
-            (found.get(cid) or assess(target, known.cloth, None, known.turned, rules), target)
-            for target, found in zip(targets, by_id, strict=True)
-        ]
-        merged.append(min(views, key=lambda view: view[0].verdict.rank) if any_will_do else _agreed(views))
+        views = [found.get(cid) or assess(target, known.cloth, None, known.turned, rules) for target, found in by_id]
+        best = min(views, key=lambda view: view.candidate.verdict.rank)
+        merged.append(best if any_will_do else _agreed(views))
     return merged
 
 
-def _agreed(views: Sequence[Aimed]) -> Aimed:
-    first, target = views[0]
-    if len({view.verdict for view, _ in views}) == 1:
+def _agreed(views: Sequence[Assessed]) -> Assessed:
+    """The first view where all agree; else nobody can say, and each reading's verdict is told."""
+    first = views[0].candidate
+    if len({view.candidate.verdict for view in views}) == 1:
         return views[0]
-    said = "; ".join(f"{target.reading.label}: {view.verdict}" for view, target in views)
+    said = "; ".join(f"{v.comparison.target.reading.label}: {v.candidate.verdict}" for v in views)
     text = f"The readings disagree: {said}."
-    by_purpose = dict.fromkeys(first.by_purpose, Verdict.CANNOT_SAY)
-    finding = Finding("readings", None, text, "")
-    open_ = replace(first, verdict=Verdict.CANNOT_SAY, by_purpose=by_purpose, harm_side=False)
-    return replace(open_, findings=(finding,), reason=text), target
+    open_ = replace(
+        first,
+        verdict=Verdict.CANNOT_SAY,
+        by_purpose=dict.fromkeys(first.by_purpose, Verdict.CANNOT_SAY),
+        harm_side=False,
+        findings=(Finding("readings", None, text, ""),),
+        reason=text,
+    )
+    return replace(views[0], candidate=open_)

@@ -1,7 +1,5 @@
 """`python -m tui` is `crosscloth`."""
 
-import sys
+from tui.cli import run
 
-from tui.cli import main
-
-sys.exit(main())
+run()

@@ -11,8 +11,6 @@ from dataclasses import dataclass
 from math import asin, pi, sin, sqrt, tan
 
 from catalog.physics.domain import OutOfDomainError, require_between, require_positive
-from catalog.physics.dutch_wires import DutchWeave
-from catalog.physics.widest_path import sphere_bounds_mm
 
 WEAVES = ("plain-dutch", "reverse-plain-dutch", "twilled-dutch")
 NO_SPHERE_REASON = (
@@ -279,6 +277,10 @@ def sphere_twilled_dutch_um(
     >>> found.converged, abs(found.sphere_um - 41.0) < 2.9 + found.resolution_um
     (True, True)
     """
+    # the solver is large and seldom needed
+    from catalog.physics.dutch_wires import DutchWeave
+    from catalog.physics.widest_path import sphere_bounds_mm
+
     require_between(1.0, 25.0, resolution_pct=resolution_pct)
     weave = DutchWeave(warp_pitch_mm, weft_pitch_mm, warp_wire_mm, weft_wire_mm, is_twilled=True)
     least, most = sphere_bounds_mm(weave, resolution_pct / 100.0, most_boxes)

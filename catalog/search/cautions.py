@@ -39,8 +39,7 @@ CAUTIONS = (
     Caution(
         "food contact",
         re.compile(r"\b(food|dairy|milk|pharma\w*|lebensmittel|aliment\w*)\b", re.IGNORECASE),
-        "Food or pharmaceutical contact: alloy, finish and traceability are prescribed; have the certificate "
-        "checked.",
+        "Food or pharmaceutical contact: alloy, finish and traceability are prescribed; have the certificate checked.",
     ),
     Caution(
         "pressure",

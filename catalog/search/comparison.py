@@ -150,9 +150,7 @@ def compare(target: Target, cloth: Cloth, turned: bool, rules: HouseRules) -> Co
     weft = replace(warp, name="weft") if alike else _direction("weft", sides[1], made.weft)
     sections = [d.section for d in (warp, weft) if d.section is not None]
     asked_open = _open((warp.asked_aperture, warp.asked_pitch), (weft.asked_aperture, weft.asked_pitch))
-    found_open = (
-        _open((made.warp.aperture_mm, made.warp.pitch_mm), (made.weft.aperture_mm, made.weft.pitch_mm)) or ZERO
-    )
+    found_open = _open((made.warp.aperture_mm, made.warp.pitch_mm), (made.weft.aperture_mm, made.weft.pitch_mm)) or ZERO
     points = None if asked_open is None else (found_open - asked_open) * 100
     section = min(sections) if sections else None
     return Comparison(target, cloth, made, turned, (warp, weft), section, asked_open, found_open, points)

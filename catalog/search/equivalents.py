@@ -69,7 +69,7 @@ def _distance(one: Cloth, other: Cloth) -> float:
 
 def _paired(inch: Cloth, metric: Cloth) -> Equivalent:
     target = aim(reading_of(inch), alloy_rule="any")
-    judged = assess(target, metric, None, False)
+    judged = assess(target, metric, None, False).candidate
     aperture = (metric.figures.warp_aperture_mm or 0) / (inch.figures.warp_aperture_mm or 1) - 1
     wire = float(metric.construction.warp.wire_mm / inch.construction.warp.wire_mm) - 1
     points = (metric.figures.open_area_pct or 0) - (inch.figures.open_area_pct or 0)

@@ -8,9 +8,7 @@ from catalog.search.comparison import Comparison, Direction
 from catalog.search.rules import HouseRules
 
 
-def decide_filter(
-    c: Comparison, gates: Sequence[Finding], rules: HouseRules
-) -> tuple[Verdict, list[Finding]]:
+def decide_filter(c: Comparison, gates: Sequence[Finding], rules: HouseRules) -> tuple[Verdict, list[Finding]]:
     """Verdict and findings for a filter target, whatever the purpose."""
     if any(gate.ok is False for gate in gates):
         return Verdict.NOT_EQUIVALENT, []
@@ -56,9 +54,7 @@ def _rating(c: Comparison, rules: HouseRules) -> tuple[str | bool | None, Findin
     words = f"Asked {asked.um:g} µm {asked.kind}, on record {found.um:g} µm {found.kind}"
     words += f" ({found.method})" if found.method else ""
     if asked.kind != found.kind or (asked.method and asked.method != found.method):
-        return None, Finding(
-            "rating", None, f"{words}: other kinds of rating don't compare; ask for the method."
-        )
+        return None, Finding("rating", None, f"{words}: other kinds of rating don't compare; ask for the method.")
     off = abs(Fraction(found.um) - Fraction(asked.um)) / Fraction(asked.um)
     if off > rules.filter_rating:
         return False, Finding("rating", False, f"{words}: over {float(rules.filter_rating * 100):g} % apart.")
@@ -72,15 +68,11 @@ def _make_findings(c: Comparison) -> list[Finding]:
     for d in c.directions:
         parts = []
         if d.asked_pitch is not None:
-            parts.append(
-                f"count {25.4 / float(d.asked_pitch):.4g} asked, {float(d.found.count_per_in):.4g} found"
-            )
+            parts.append(f"count {25.4 / float(d.asked_pitch):.4g} asked, {float(d.found.count_per_in):.4g} found")
         if d.asked_wire is not None:
             parts.append(f"wire {float(d.asked_wire):.4g} mm asked, {float(d.found.wire_mm):.4g} mm found")
         if parts:
-            found.append(
-                Finding(f"{d.name} make", _make_ok(d), f"{d.name.capitalize()}: {'; '.join(parts)}.")
-            )
+            found.append(Finding(f"{d.name} make", _make_ok(d), f"{d.name.capitalize()}: {'; '.join(parts)}."))
     return found
 
 

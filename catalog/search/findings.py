@@ -51,9 +51,7 @@ def _apertures(c: Comparison, purposes: tuple[Purpose, ...]) -> Iterator[Finding
             yield Finding("aperture", True, f"{label} {both(d.found.aperture_mm)}: not asked, not judged.")
             continue
         if abs(off) <= d.aperture_rounding:
-            yield Finding(
-                "aperture", True, f"{label} {both(d.found.aperture_mm)} equals the asked one to rounding."
-            )
+            yield Finding("aperture", True, f"{label} {both(d.found.aperture_mm)} equals the asked one to rounding.")
             continue
         within = abs(off) <= d.tolerance
         text = (

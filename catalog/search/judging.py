@@ -1,7 +1,7 @@
 """A cloth, judged: gates, comparison, findings, verdicts, penalty and lots in one candidate."""
 
 from collections.abc import Sequence
-from dataclasses import replace
+from dataclasses import dataclass, replace
 
 from catalog.cloth import Cloth
 from catalog.search.candidate import Candidate, Finding, Fit, StockLine, Verdict
@@ -23,6 +23,15 @@ SIDE_BY_SIDE = (Purpose.RETAIN, Purpose.PASS)
 GOOD = (Verdict.INTERCHANGEABLE, Verdict.NEAR_SAFE, Verdict.NEAR_RISK)
 
 
+@dataclass(frozen=True, slots=True)
+class Assessed:
+    """A candidate with its verdict, and the comparison and gates that its words will be made of."""
+
+    candidate: Candidate
+    comparison: Comparison
+    gates: list[Finding]
+
+
 def judge(
     target: Target,
     cloth: Cloth,
@@ -32,19 +41,20 @@ def judge(
     rules: HouseRules = HOUSE_RULES,
 ) -> Candidate:
     """Set *cloth* against *target* and say what differs and whether it matters."""
-    return describe(target, assess(target, cloth, distance, turned, rules), lots, rules)
+    return describe(assess(target, cloth, distance, turned, rules), lots, rules)
 
 
 def assess(
     target: Target, cloth: Cloth, distance: float | None, turned: bool, rules: HouseRules = HOUSE_RULES
-) -> Candidate:
+) -> Assessed:
     """The verdict and penalty alone: enough to order a list by, at a fraction of the cost of the words."""
     c = compare(target, cloth, turned, rules)
     purposes = target.purposes or SIDE_BY_SIDE
-    by_purpose = _verdicts(c, purposes, gate_findings(c), rules)
+    gates = gate_findings(c)
+    by_purpose = _verdicts(c, purposes, gates, rules)
     verdict = max((by_purpose[p.value] for p in purposes), key=lambda v: v.rank)
     harmed = verdict in GOOD and any(is_to_harm_side(p, c) for p in purposes if not cloth.construction.is_filter)
-    return Candidate(
+    candidate = Candidate(
         cloth=cloth,
         distance=distance,
         verdict=verdict,
@@ -53,14 +63,14 @@ def assess(
         turned=turned,
         penalty=penalty(c, purposes, rules),
     )
+    return Assessed(candidate, c, gates)
 
 
-def describe(
-    target: Target, candidate: Candidate, lots: Sequence[Lot] = (), rules: HouseRules = HOUSE_RULES
-) -> Candidate:
+def describe(assessed: Assessed, lots: Sequence[Lot] = (), rules: HouseRules = HOUSE_RULES) -> Candidate:
     """Add deviations, findings in sentences, the one reason and the lots to an assessed candidate."""
-    c = compare(target, candidate.cloth, candidate.turned, rules)
-    found = [*candidate.findings, *gate_findings(c), *_details(c, target.purposes or SIDE_BY_SIDE, rules)]
+    candidate, c, target = assessed.candidate, assessed.comparison, assessed.comparison.target
+    details = _details(c, assessed.gates, target.purposes or SIDE_BY_SIDE, rules)
+    found = [*candidate.findings, *assessed.gates, *details]
     return replace(
         candidate,
         deviations=deviations(c, rules),
@@ -84,9 +94,9 @@ def _verdicts(
     return {p.value: decide(p, c, gates, rules) for p in wanted}
 
 
-def _details(c: Comparison, purposes: tuple[Purpose, ...], rules: HouseRules) -> list[Finding]:
+def _details(c: Comparison, gates: list[Finding], purposes: tuple[Purpose, ...], rules: HouseRules) -> list[Finding]:
     if _is_about_filter_cloth(c):
-        return decide_filter(c, gate_findings(c), rules)[1]
+        return decide_filter(c, gates, rules)[1]
     guards = guard_findings(c) if Purpose.GUARD in purposes else []
     return guards + findings(c, purposes, rules)
 
@@ -106,6 +116,6 @@ def _stock_line(lot: Lot, target: Target) -> StockLine:
     return StockLine(lot, Fit(found.ok, found.why))
 
 
-def order(candidates: Sequence[Candidate]) -> list[Candidate]:
+def rank(candidate: Candidate) -> tuple[int, float, str]:
     """Best verdict first, then the penalty, then id."""
-    return sorted(candidates, key=lambda c: (c.verdict.rank, round(c.penalty.total, 9), c.cloth.id))
+    return (candidate.verdict.rank, round(candidate.penalty.total, 9), candidate.cloth.id)

@@ -53,9 +53,7 @@ class Filters:
 class Reader(Protocol):
     """Reading access to a catalogue and its stock."""
 
-    def nearest(
-        self, point: Point, k: int, filters: Filters = Filters()
-    ) -> Sequence[tuple[Cloth, float, bool]]:
+    def nearest(self, point: Point, k: int, filters: Filters = Filters()) -> Sequence[tuple[Cloth, float, bool]]:
         """Return the *k* nearest as (cloth, distance, turned), by distance then id.
 
         Each cloth lies at its smaller distance of the two ways round; *turned* says that this is the turned one.

@@ -16,7 +16,7 @@ from catalog.construction import Construction, Weave, Wires
 from catalog.errors import InputError
 from catalog.figures import figures
 from catalog.search.candidate import Candidate
-from catalog.search.judging import judge, order
+from catalog.search.judging import judge, rank
 from catalog.target import Purpose
 from catalog.units import Length
 
@@ -192,7 +192,7 @@ def test_filter_cloth_is_compared_with_filter_cloth_only() -> None:
 
 def test_candidates_stand_best_first_then_by_penalty_then_by_id() -> None:
     lines = [judged(offered, Purpose.RETAIN) for offered, *_ in SIFTER]
-    assert [c.cloth.name for c in order(lines)][:4] == ["62x0.0065", "60x0.0065", "0.25/0.14", "60x0.0075"]
+    assert [c.cloth.name for c in sorted(lines, key=rank)][:4] == ["62x0.0065", "60x0.0065", "0.25/0.14", "60x0.0075"]
 
 
 def test_a_tolerance_is_named_for_what_it_is() -> None:

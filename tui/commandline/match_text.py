@@ -158,6 +158,8 @@ def _off(candidate: Candidate, name: str) -> str:
 
 
 def _wrapped(text: str, first: str, rest: str) -> list[str]:
+    if len(first) + len(text) <= WIDTH:
+        return [first + text]
     return textwrap.wrap(
         text, WIDTH, initial_indent=first, subsequent_indent=rest, break_long_words=True, break_on_hyphens=False
     ) or [first]

@@ -1,5 +1,6 @@
 """Callouts out of files, a line or a row at a time, with progress on a terminal."""
 
+import gc
 import sys
 from collections.abc import Iterator
 from pathlib import Path
@@ -14,6 +15,7 @@ def callouts_from(name: str, column: str | None) -> Iterator[tuple[int, str]]:
 
     CSV and XLSX need the column's name. Raises InputError with the reason.
     """
+    gc.enable()
     kind = Path(name).suffix.lower()
     if kind in (".csv", ".xlsx"):
         from catalog.exchange.callout_column import rows_of
