@@ -11,7 +11,7 @@ from catalog.errors import NotFoundError
 from catalog.report.drawing_vector import Drawing, draw
 from catalog.report.fingerprint import fingerprint, target_of
 from catalog.report.outside_text import tame
-from catalog.report.sheet_rows import Row, need_words, rows
+from catalog.report.sheet_rows import Row, figure_rows, named_rows, need_words
 from catalog.report.sheet_words import DEFERENCE, HARM_SIDE, assumptions, verdict_words
 from catalog.search.candidate import Candidate, Finding, StockLine
 from catalog.search.comparison import compare
@@ -96,7 +96,10 @@ class Sheet:
     heading: tuple[Line, ...]
     verdict: str
     reason: str
-    rows: tuple[Row, ...]
+    named: tuple[Row, ...]
+    """What has a name and no figure: text as written, weave, alloy, standard."""
+    figures: tuple[Row, ...]
+    """Figures with their differences."""
     findings: tuple[Note, ...]
     """Not met first, then open, then met."""
     cautions: tuple[str, ...]
@@ -122,7 +125,8 @@ def build_sheet(answer: Answer, candidate: Candidate, details: Details) -> Sheet
         heading=tuple(_heading(details)),
         verdict=verdict_words(candidate),
         reason=tame(candidate.reason, 400),
-        rows=rows(answer.request.text, compared, candidate, target.purposes or SIDE_BY_SIDE),
+        named=tuple(named_rows(answer.request.text, compared)),
+        figures=tuple(figure_rows(compared, candidate, target.purposes or SIDE_BY_SIDE)),
         findings=_notes(candidate.findings),
         cautions=(*(tame(text, 400) for text in answer.cautions), *([HARM_SIDE] if candidate.harm_side else [])),
         lots=tuple(_lot_row(line) for line in stock),

@@ -72,8 +72,10 @@ def _table(names: Sequence[str], cells: Iterable[Sequence[str]], kind: str = "")
 
 def _comparison(sheet: Sheet) -> Iterator[str]:
     yield "<h2>Required and offered</h2>"
-    names = ("Property", "Required", "Offered", "Difference", "Limit", "What it hurts")
-    yield from _table(names, ((r.name, r.required, r.offered, r.difference, r.limit, r.hurts) for r in sheet.rows))
+    yield from _table(("", "Required", "Offered"), ((r.name, r.required, r.offered) for r in sheet.named))
+    yield "<h2>Differences</h2>"
+    names = ("", "Required", "Offered", "Difference", "Limit", "What it hurts")
+    yield from _table(names, ((r.name, r.required, r.offered, r.difference, r.limit, r.hurts) for r in sheet.figures))
 
 
 def _stock(sheet: Sheet) -> Iterator[str]:

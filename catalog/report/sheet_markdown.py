@@ -32,6 +32,7 @@ def _lines(sheet: Sheet) -> Iterator[str]:
     if sheet.reason:
         yield from (escaped(sheet.reason), "")
     yield from _section("Required and offered", _comparison(sheet))
+    yield from _section("Differences", _differences(sheet))
     yield from _section("Findings", (f"- **{n.stand}:** {escaped(n.text)}{_source(n.source)}" for n in sheet.findings))
     yield from _section("Cautions", (f"- {escaped(text)}" for text in sheet.cautions) if sheet.cautions else ["None."])
     yield from _section("Stock and certificate", _stock(sheet))
@@ -68,8 +69,12 @@ def _table(names: Sequence[str], cells: Iterable[Sequence[str]]) -> Iterator[str
 
 
 def _comparison(sheet: Sheet) -> Iterator[str]:
-    names = ("Property", "Required", "Offered", "Difference", "Limit", "What it hurts")
-    cells = ((r.name, r.required, r.offered, r.difference, r.limit, r.hurts) for r in sheet.rows)
+    yield from _table(("", "Required", "Offered"), ((r.name, r.required, r.offered) for r in sheet.named))
+
+
+def _differences(sheet: Sheet) -> Iterator[str]:
+    names = ("", "Required", "Offered", "Difference", "Limit", "What it hurts")
+    cells = ((r.name, r.required, r.offered, r.difference, r.limit, r.hurts) for r in sheet.figures)
     return _table(names, cells)
 
 

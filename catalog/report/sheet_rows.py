@@ -33,11 +33,6 @@ class Row:
     """Which purposes the difference hurts, or that it doesn't."""
 
 
-def rows(text: str, c: Comparison, candidate: Candidate, purposes: tuple[Purpose, ...]) -> tuple[Row, ...]:
-    """Everything that is set side by side: names and make first, then the figures."""
-    return (*_named(text, c), *_figures(c, candidate, purposes))
-
-
 def need_words(need: Need) -> str:
     """'12 discs Ø 350 mm (13.78 in)', '4 pieces 1200 × 2400 mm (47.24 × 94.49 in)'."""
     if need.diameter_mm is not None:
@@ -52,7 +47,8 @@ def need_words(need: Need) -> str:
     return f"{need.pieces} {noun} {metric} mm ({inches} in)"
 
 
-def _named(text: str, c: Comparison) -> Iterator[Row]:
+def named_rows(text: str, c: Comparison) -> Iterator[Row]:
+    """What has a name and no figure: as written, cloth, weave, alloy, finish, grade, standard, limits."""
     target, cloth, made = c.target, c.cloth, c.made
     yield Row("As written", tame(text), tame(cloth.declared))
     yield Row("Cloth", "", tame(f"{cloth.name} [{cloth.id}]"))
@@ -94,7 +90,8 @@ def _limit_words(key: str, least: float | None, most: float | None) -> str:
     return f"{name.get(key, key.replace('_', ' '))} {', '.join(filter(None, said))}"
 
 
-def _figures(c: Comparison, candidate: Candidate, purposes: tuple[Purpose, ...]) -> Iterator[Row]:
+def figure_rows(c: Comparison, candidate: Candidate, purposes: tuple[Purpose, ...]) -> Iterator[Row]:
+    """The figures with their differences: apertures, wires, counts, open area, section, mass, thickness."""
     yield from _of_filter(c, candidate) if c.made.is_filter else _of_openings(c, candidate, purposes)
     yield _mass(candidate)
     yield Row("Thickness", "", f"{both(c.cloth.figures.thickness_mm)}, at least")
