@@ -11,6 +11,7 @@ from dataclasses import dataclass
 from math import asin, pi, sin, sqrt, tan
 
 from catalog.physics.domain import OutOfDomainError, require_between, require_positive
+from catalog.physics.dutch_wires import DutchWeave
 
 WEAVES = ("plain-dutch", "reverse-plain-dutch", "twilled-dutch")
 NO_SPHERE_REASON = (
@@ -278,7 +279,6 @@ def sphere_twilled_dutch_um(
     (True, True)
     """
     # the solver is large and seldom needed
-    from catalog.physics.dutch_wires import DutchWeave
     from catalog.physics.widest_path import sphere_bounds_mm
 
     require_between(1.0, 25.0, resolution_pct=resolution_pct)
