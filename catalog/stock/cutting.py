@@ -1,16 +1,17 @@
 """Whether pieces come out of one lot, how they lie, how they are cut, and what is left."""
 
+from collections import Counter
 from collections.abc import Sequence
 from dataclasses import dataclass
 
 from catalog.errors import InputError
 from catalog.stock import cutting_search
 from catalog.stock.cutting_cells import Cell, Grid, Stagger
-from catalog.stock.cutting_filling import Attempt
+from catalog.stock.cutting_filling import Attempt, Kind
 from catalog.stock.cutting_notes import notes
 from catalog.stock.cutting_pieces import UM_PER_MM, Piece, to_um
 from catalog.stock.cutting_reasons import why_not
-from catalog.stock.cutting_room import Room, rooms
+from catalog.stock.cutting_room import Room, kinds_of, rooms
 from catalog.stock.cutting_search import THOROUGH, Effort
 from catalog.stock.cutting_steps import steps
 from catalog.stock.layout import LotCut, Placement, Rest
@@ -32,8 +33,10 @@ class Cutting:
             raise InputError(f"A kerf of {self.kerf_mm:g} mm can't be cut: state 0 or a few millimetres.")
 
 
-def cut_lot(lot: Lot, pieces: Sequence[Piece], how: Cutting | None = None) -> LotCut:
-    """Lay *pieces* out in the free part of *lot*.
+def cut_lot(
+    lot: Lot, pieces: Sequence[Piece], how: Cutting | None = None, wanted: Sequence[int] | None = None
+) -> LotCut:
+    """Lay *pieces* out in the free part of *lot*; *wanted* of each, where that isn't the whole quantity.
 
     Every cut runs from edge to edge of the part it divides; discs are cut out of their squares, or out of one block
     where only offset rows hold as many as are asked. Most pieces come first, then the least length of cloth. Raises
@@ -43,12 +46,23 @@ def cut_lot(lot: Lot, pieces: Sequence[Piece], how: Cutting | None = None) -> Lo
     if not pieces:
         raise InputError("The cut list is empty: state what is to be cut.")
     kerf = to_um(how.kerf_mm)
-    found = [(_searched(room, kerf, how.effort), room) for room in rooms(lot, pieces, kerf)]
+    asked = tuple(wanted) if wanted is not None else tuple(piece.quantity for piece in pieces)
+    found = [(_searched(room, kerf, how.effort), room) for room in rooms(lot, kinds_of(pieces, kerf, asked), kerf)]
     if not found:
-        return _result(lot, tuple(pieces), how, Room(0, 0, 0, 0, ()), Cell(0, 0, 0, 0))
-    attempt, room = max(found, key=lambda item: (item[0].count, item[0].area))
+        return _result(lot, tuple(pieces), asked, how, Room(0, 0, 0, 0, ()), Cell(0, 0, 0, 0))
+    attempt, room = max(found, key=lambda item: how.effort.worth(item[0]))
     root = _with_whole_rest(attempt, room, kerf, how)
-    return _result(lot, tuple(pieces), how, room, root)
+    return _result(lot, tuple(pieces), asked, how, room, root)
+
+
+def most_of(lot: Lot, kinds: Sequence[Kind], kerf: int, effort: Effort) -> Counter[int]:
+    """How many of each kind the search lays out in *lot*, by index; nothing else is worked out."""
+    found = [_searched(room, kerf, effort) for room in rooms(lot, kinds, kerf)]
+    counts: Counter[int] = Counter()
+    for leaf in max(found, key=effort.worth).root.leaves() if found else ():
+        if leaf.content is not None:
+            counts[leaf.content.kind] += leaf.content.count
+    return counts
 
 
 def _searched(room: Room, kerf: int, effort: Effort) -> Attempt:
@@ -71,14 +85,16 @@ def _with_whole_rest(attempt: Attempt, room: Room, kerf: int, how: Cutting) -> C
     return root if root.parts[1].length else inside
 
 
-def _result(lot: Lot, pieces: tuple[Piece, ...], how: Cutting, room: Room, root: Cell) -> LotCut:
+def _result(
+    lot: Lot, pieces: tuple[Piece, ...], wanted: tuple[int, ...], how: Cutting, room: Room, root: Cell
+) -> LotCut:
     kerf = to_um(how.kerf_mm)
     placements = tuple(sorted(_placements(root, room, pieces, kerf), key=lambda p: (p.y_mm, p.x_mm)))
     left = sorted(_rests(lot, root, room, kerf), key=lambda rest: (-rest.area_m2, rest.y_mm, rest.x_mm))
     kept = [rest for rest in left if min(rest.width_mm, rest.length_mm) >= how.least_remnant_mm]
     whole = max((rest.length_mm for rest in kept if rest.is_full_width), default=0.0)
     has_pieces = bool(placements)
-    missing = [why_not(lot, piece) for piece in pieces]
+    missing = [why_not(lot, piece) for piece, number in zip(pieces, wanted, strict=True) if number]
     return LotCut(
         lot=lot,
         pieces=pieces,
@@ -90,6 +106,7 @@ def _result(lot: Lot, pieces: tuple[Piece, ...], how: Cutting, room: Room, root:
         scraps=tuple(rest for rest in left if rest not in kept) if has_pieces else (),
         taken_mm=room.length / UM_PER_MM - whole if has_pieces else 0.0,
         steps=steps(root, pieces, kerf) if has_pieces else (),
+        wanted=wanted,
         notes=notes(lot, pieces, placements, how.least_remnant_mm, how.kerf_mm),
         why_missing=tuple(reason for reason in missing if reason),
     )

@@ -52,7 +52,7 @@ class Stagger:
 Content: TypeAlias = Grid | Stagger
 
 
-@dataclass(slots=True)
+@dataclass(slots=True, eq=False)
 class Cell:
     """A rectangular part: whole (with content, or left over), or cut in two."""
 

@@ -28,6 +28,10 @@ class Kind:
         """Area of one piece's rectangle with its kerf."""
         return self.shapes[0][0] * self.shapes[0][1]
 
+    def times(self, quantity: int) -> "Kind":
+        """The same size in another number."""
+        return Kind(self.index, self.shapes, quantity, self.is_disc)
+
 
 @dataclass(frozen=True, slots=True)
 class Attempt:
@@ -73,6 +77,7 @@ def fill(
     """Place *order* one after the other, each where *fit* is least; what fits nowhere is passed over."""
     root = Cell(0, 0, width, length)
     free = [root]
+    least = min((min(kind.shapes[0][:2]) for kind in order), default=0)
     count = area = reach = 0
     for kind in order:
         wanted = kind.quantity
@@ -80,27 +85,29 @@ def fill(
             found = _best(free, kind, fit)
             if found is None:
                 break
-            cell, shape = found
+            place_of, shape = found
+            cell = free.pop(place_of)
             w, h, content = _cluster(cell, kind, shape, wanted, grain, staggered)
-            free.remove(cell)
             reach = max(reach, cell.y + h)
-            free += place(cell, w, h, content, split(cell, w, h))
+            left = place(cell, w, h, content, split(cell, w, h))
+            free += [part for part in left if part.width >= least and part.length >= least]
             wanted -= content.count
             count += content.count
             area += content.count * kind.area
     return Attempt(root, count, area, reach)
 
 
-def _best(free: list[Cell], kind: Kind, fit: Fit) -> tuple[Cell, Shape] | None:
-    best: tuple[Cell, Shape] | None = None
+def _best(free: list[Cell], kind: Kind, fit: Fit) -> tuple[int, Shape] | None:
+    """Where *kind* goes: which of the free parts, and the way it lies."""
+    best: tuple[int, Shape] | None = None
     least: tuple[int, int] | None = None
     for shape in kind.shapes:
         w, h, _ = shape
-        for cell in free:
+        for place_of, cell in enumerate(free):
             if w <= cell.width and h <= cell.length:
                 score = fit(cell, w, h)
                 if least is None or score < least:
-                    least, best = score, (cell, shape)
+                    least, best = score, (place_of, shape)
     return best
 
 

@@ -20,14 +20,15 @@ class Room:
     kinds: tuple[Kind, ...]
 
 
-def kinds_of(pieces: Sequence[Piece], kerf: int) -> tuple[Kind, ...]:
-    """The cut list in micrometres with one kerf added to each side."""
-    return tuple(_kind(index, piece, kerf) for index, piece in enumerate(pieces))
+def kinds_of(pieces: Sequence[Piece], kerf: int, wanted: Sequence[int]) -> tuple[Kind, ...]:
+    """*wanted* of each piece in micrometres, with one kerf added to each side; none for those not wanted."""
+    numbered = enumerate(zip(pieces, wanted, strict=True))
+    return tuple(_kind(index, piece, kerf, number) for index, (piece, number) in numbered if number)
 
 
-def rooms(lot: Lot, pieces: Sequence[Piece], kerf: int) -> list[Room]:
+def rooms(lot: Lot, kinds: Sequence[Kind], kerf: int) -> list[Room]:
     """The rectangles to try. A roll, remnant or panel has one; in a disc it may have several proportions."""
-    kinds = kinds_of(pieces, kerf)
+    kinds = tuple(kinds)
     width, length = lot.usable_width_mm * UM_PER_MM, lot.free_length_mm * UM_PER_MM
     if width <= 0 or length <= 0:
         return []
@@ -39,11 +40,11 @@ def rooms(lot: Lot, pieces: Sequence[Piece], kerf: int) -> list[Room]:
     return found + [_one_disc(inside, kind, kerf) for kind in kinds if kind.is_disc]
 
 
-def _kind(index: int, piece: Piece, kerf: int) -> Kind:
+def _kind(index: int, piece: Piece, kerf: int, number: int) -> Kind:
     across, along = to_um(piece.across_mm) + kerf, to_um(piece.along_mm) + kerf
     is_square = across == along
     turned = () if piece.warp_bound or is_square else ((along, across, True),)
-    return Kind(index, ((across, along, False), *turned), piece.quantity, piece.is_disc)
+    return Kind(index, ((across, along, False), *turned), number, piece.is_disc)
 
 
 def _inscribed(diameter: int, across: int, along: int, kinds: tuple[Kind, ...]) -> Room:

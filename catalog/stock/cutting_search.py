@@ -9,6 +9,7 @@ Sizes are whole micrometres with one kerf added (see cutting_cells).
 
 from collections.abc import Callable, Iterator, Sequence
 from dataclasses import dataclass, replace
+from itertools import islice
 from random import Random
 from typing import TypeAlias
 
@@ -19,14 +20,33 @@ from catalog.stock.cutting_uniform import blocks
 SEED = 1195
 SINGLE_PIECES_UP_TO = 40
 """Longer lists are placed by rows and blocks only."""
+MANY_SIZES = 20
+"""Beyond so many sizes attempts become fewer."""
 
 
 @dataclass(frozen=True, slots=True)
 class Effort:
-    """How long to look: attempts by random rules, and how often the length is halved in on."""
+    """How long to look: attempts by random rules, how often the length is halved in on, attempts by fixed rules."""
 
     random_attempts: int
     halvings: int
+    fixed_attempts: int = 6
+    by_area: bool = False
+    """Most area before most pieces: right where other lots take what is missing."""
+
+    @property
+    def is_quick(self) -> bool:
+        """Whether it is one look only, without a comparison with straight rows."""
+        return not self.random_attempts
+
+    def attempts(self, sizes: int) -> int:
+        """Attempts by random rules for a list of so many sizes: fewer for long lists, where each takes longer."""
+        return self.random_attempts * MANY_SIZES // max(sizes, MANY_SIZES)
+
+    def worth(self, attempt: Attempt) -> tuple[int, int, int]:
+        """What the better attempt has more of."""
+        first = (attempt.area, attempt.count) if self.by_area else (attempt.count, attempt.area)
+        return *first, -attempt.length
 
 
 QUICK = Effort(0, 0)
@@ -52,17 +72,17 @@ def search(width: int, length: int, kinds: Sequence[Kind], effort: Effort = THOR
     """
     kinds = [kind for kind in kinds if _lies_in(kind, width, length)]
     best = _most(width, length, kinds, effort, staggered=False)
-    if best.count < _asked(kinds) and any(kind.is_disc for kind in kinds):
+    if best.count == _asked(kinds):
+        return _shortest(width, best, kinds, effort) if best.count else best
+    if any(kind.is_disc for kind in kinds):
         offset = _most(width, length, kinds, effort, staggered=True)
-        best = offset if offset.count > best.count else best
-    elif best.count:
-        best = _shortest(width, best, kinds, effort)
+        best = offset if effort.worth(offset)[:2] > effort.worth(best)[:2] else best
     return best
 
 
-def is_better(one: Attempt, other: Attempt) -> bool:
+def is_better(one: Attempt, other: Attempt, effort: Effort = THOROUGH) -> bool:
     """Whether *one* is the better layout of the same list in the same cloth."""
-    plain, plain_other = (one.count, one.area, -one.length), (other.count, other.area, -other.length)
+    plain, plain_other = effort.worth(one), effort.worth(other)
     return plain > plain_other or (plain == plain_other and _togetherness(one) > _togetherness(other))
 
 
@@ -73,20 +93,21 @@ def _togetherness(attempt: Attempt) -> int:
 
 def _most(width: int, length: int, kinds: Sequence[Kind], effort: Effort, staggered: bool) -> Attempt:
     """The attempt with the most pieces; looks no further once a bound by area is reached."""
-    best = straight_rows(width, length, kinds)
-    ceiling = _ceiling(width * length, kinds)
-    if len(kinds) == 1 and not staggered:
-        laid = blocks(width, length, kinds[0])
-        return laid if is_better(laid, best) else best
-    for rules in _fixed(kinds):
-        found = fill(width, length, *rules, staggered)
-        best = found if is_better(found, best) else best
+    best = fill(width, length, *next(_fixed(kinds)), staggered)
+    ceiling = _asked(kinds) if staggered or effort.by_area else _ceiling(width * length, kinds)
+    more = [] if effort.is_quick else [straight_rows(width, length, kinds)]
+    if len(kinds) == 1 and not staggered and not effort.is_quick:
+        more.append(blocks(width, length, kinds[0]))
+    for rules in islice(_fixed(kinds), 1, effort.fixed_attempts):
+        more.append(fill(width, length, *rules, staggered))
+    for found in more:
+        best = found if is_better(found, best, effort) else best
     rng = Random(SEED)
-    for _ in range(effort.random_attempts):
-        if len(kinds) == 1 or (best.count >= ceiling and not staggered):
+    for _ in range(effort.attempts(len(kinds))):
+        if len(kinds) == 1 or best.count >= ceiling:
             break
         found = fill(width, length, *_drawn(kinds, best.count, rng), staggered)
-        best = found if is_better(found, best) else best
+        best = found if is_better(found, best, effort) else best
     return best
 
 
@@ -137,7 +158,7 @@ def _drawn(kinds: Sequence[Kind], reached: int, rng: Random) -> Rules:
     if reached < asked and rng.random() < 0.5:
         kinds = _smallest(kinds, reached + 1)
     if grain == SINGLE:
-        kinds = [replace(kind, quantity=1) for kind in kinds for _ in range(kind.quantity)]
+        kinds = [kind.times(1) for kind in kinds for _ in range(kind.quantity)]
     key, noise = rng.choice(KEYS), rng.choice((0.0, 0.2, 0.6, 1.0))
     order = sorted(kinds, key=lambda kind: key(kind) * (1 + noise * (rng.random() - 0.5)))
     return order, rng.choice(FITS), rng.choice(SPLITS), grain
@@ -148,7 +169,7 @@ def _smallest(kinds: Sequence[Kind], number: int) -> list[Kind]:
     for kind in sorted(kinds, key=lambda kind: kind.area):
         quantity = min(kind.quantity, number - _asked(kept))
         if quantity:
-            kept.append(replace(kind, quantity=quantity))
+            kept.append(kind.times(quantity))
     return kept
 
 

@@ -80,6 +80,8 @@ class LotCut:
     """The straight cuts in words, in their order."""
     notes: tuple[str, ...]
     """What was assumed, and what to look at."""
+    wanted: tuple[int, ...]
+    """How many of each piece were to come out of this lot."""
     why_missing: tuple[str, ...] = ()
     """For each piece that doesn't come out at all, why."""
 
@@ -94,7 +96,7 @@ class LotCut:
     @property
     def missing(self) -> tuple[int, ...]:
         """How many of each piece don't come out."""
-        return tuple(piece.quantity - count for piece, count in zip(self.pieces, self.placed, strict=True))
+        return tuple(asked - count for asked, count in zip(self.wanted, self.placed, strict=True))
 
     @property
     def is_complete(self) -> bool:
