@@ -124,6 +124,7 @@ def _counts(draft: Draft) -> None:
         if claim := count_claim(row, row[-1].unit if row[-1].unit != "M" else None):
             take(row, "count")
             draft.claims.append(claim)
+            said_again(draft, "count", row)
 
 
 def _metres(draft: Draft, number: Item) -> bool:
@@ -209,6 +210,7 @@ def _mesh_counts(draft: Draft, row: list[Item]) -> None:
     if claim is None:
         return
     take(row, "count")
+    said_again(draft, "count", row)
     number = row[0]
     label = f"{' x '.join(n.text for n in row)} per inch"
     counted = Option(label, (claim,), USUAL, sense="sieve or count")
@@ -293,9 +295,9 @@ def _apertures(draft: Draft) -> None:
     """'0.25 mm aperture', 'maille 0,10', '3/8 sq opg', 'slot 1 x 8 mm': clear openings; of a sieve, with the standard's wire."""
     for row in groups(draft, "aperture"):
         take(row, "aperture")
-        for number in row:
-            _restated(draft, "aperture", number)
-        if not (draft.is_sieve and row[0].is_length and _sieve_opening(draft, row[0])):
+        if draft.is_sieve and row[0].is_length and _sieve_opening(draft, row[0]):
+            said_again(draft, "aperture", row)
+        else:
             _lengths(draft, "aperture", row)
     if draft.is_sieve and not any(n.taken == "aperture" for n in draft.all_numbers()):
         for number in draft.numbers():
@@ -348,31 +350,39 @@ def _wires(draft: Draft) -> None:
 
 def _lengths(draft: Draft, slot: str, row: list[Item]) -> None:
     """Lengths with a unit are claims; without one both units are thought of, the likelier first."""
-    for number in row:
-        if slot != "aperture":
-            _restated(draft, slot, number)
     if row[0].unit == "hundredths" or row[-1].unit == "hundredths":
         _hundredths(draft, slot, row)
     elif any(n.is_length for n in row):
         draft.claims.append(length_claim(slot, row, next(n.unit for n in row if n.is_length)))
     else:
         draft.choices.append(unit_options(draft, slot, row))
+    said_again(draft, slot, row)
 
 
-def _restated(draft: Draft, slot: str, number: Item) -> None:
-    for again in number.restated:
-        again.taken = slot
-        if again.is_length:
-            draft.claims.append(length_claim(slot, [again]))
-        elif (
-            slot == "aperture"
-            and again.unit == "designation"
-            and number.is_length
-            and not is_opening_of(again, number.length())
-        ):
-            draft.problem("E_INCONSISTENT", f"No. {again.text} doesn't open {number.text} {number.unit}.", again)
-        elif slot == "pitch" and (claim := count_claim([again])):
-            draft.claims.append(claim)
+def said_again(draft: Draft, slot: str, row: list[Item]) -> None:
+    """What stands in brackets behind figures: the same in another unit; behind a count or a sieve's number, its opening."""
+    pairs = list(zip(*(n.restated for n in row), strict=False)) if len(row) > 1 else [(a,) for a in row[0].restated]
+    if len(row) > 1 and not pairs:
+        pairs = [(again,) for again in row[-1].restated]
+    for numbers in pairs:
+        again = list(numbers)
+        take(again, "pitch" if slot == "count" else slot)
+        _claim_again(draft, slot, row, again)
+
+
+def _claim_again(draft: Draft, slot: str, row: list[Item], again: list[Item]) -> None:
+    first = again[0]
+    if first.is_length:
+        draft.claims.append(length_claim("aperture" if slot == "count" else slot, again))
+    elif slot == "aperture" and first.unit == "designation":
+        if row[0].is_length and not is_opening_of(first, row[0].length()):
+            message = f"No. {first.text} doesn't open {row[0].text} {row[0].unit}."
+            draft.problem("E_INCONSISTENT", message, first)
+    elif slot in ("pitch", "count") and (claim := count_claim(again)):
+        draft.claims.append(claim)
+    elif first.unit != "gauge":
+        message = f"What {first.text} in brackets says of {row[0].text} isn't understood."
+        draft.problem("E_NOT_UNDERSTOOD", message, first)
 
 
 def hundredths(draft: Draft, slot: str, row: list[Item]) -> None:

@@ -67,7 +67,7 @@ def labelled(items: list[Item]) -> list[Item]:
     for at, item in enumerate(items):
         if item.is_number or item.kind == "chain":
             last = item
-        elif is_separator(item) and item.text != ")":
+        elif item.kind == "sign" and (item.text in ":=" or (is_separator(item) and item.text != ")")):
             last = None
         elif item.kind == "term" and not item.taken:
             if item.has("slot"):

@@ -125,7 +125,8 @@ def _two_beside_counts(draft: Draft, free: list[Item], shape: str) -> None:
         draft.choices.append(wires)
         return
     free[0].taken = "aperture"
-    units = (None,) if shape == "LL" else dict.fromkeys((preferred_unit(draft, free), "mm", "in"))
+    dropped_zero = any(n.number and n.number.written[0] == "." for n in free)
+    units = (None,) if shape == "LL" else ("in", "mm") if dropped_zero or shape == "FF" else ("mm", "in")
     both = [
         Option(
             "opening and wire",
@@ -137,7 +138,7 @@ def _two_beside_counts(draft: Draft, free: list[Item], shape: str) -> None:
         )
         for at, unit in enumerate(units)
     ]
-    named = [replace(w, label="wires of warp and weft", likelihood=POSSIBLE, rank=max(1, w.rank)) for w in wires]
+    named = [replace(w, label="wires of warp and weft", likelihood=POSSIBLE, rank=2) for w in wires]
     draft.choices.append([*both, *named])
 
 

@@ -255,12 +255,8 @@ def _brackets(items: list[Item]) -> list[Item]:
     at = 0
     while at < len(items):
         said, end = _bracketed(items, at)
-        holder = _holder(out)
-        if said and holder and not any(number.slot for number in said):
-            _restate(holder, said)
-            holder.end = items[end - 1].end
-            if out[-1] is not holder:
-                out[-1].end = holder.end
+        if said and out and _restate(out[-1], said):
+            out[-1].end = items[end - 1].end
             at = end
         else:
             out.append(items[at])
@@ -269,26 +265,36 @@ def _brackets(items: list[Item]) -> list[Item]:
 
 
 def _bracketed(items: list[Item], at: int) -> tuple[list[Item], int]:
-    """The numbers between brackets, where there is nothing else between them."""
+    """The figures between brackets, where there is nothing else between them."""
     if items[at].text not in ("(", "["):
         return [], at
     said, end = [], at + 1
-    while end < len(items) and (items[end].is_number or items[end].text in (",", "/", "=", "~")):
-        if items[end].is_number:
+    while end < len(items) and (_is_figure(items[end]) or items[end].text in (",", "/", "=", "~")):
+        if _is_figure(items[end]):
             said.append(items[end])
         end += 1
     closed = end < len(items) and items[end].text in (")", "]")
     return (said, end + 1) if closed else ([], at)
 
 
-def _holder(out: list[Item]) -> Item | None:
-    if not out:
-        return None
-    return out[-1].members[-1] if out[-1].kind == "chain" else (out[-1] if out[-1].is_number else None)
+def _is_figure(item: Item) -> bool:
+    return item.is_number or item.kind == "chain"
 
 
-def _restate(holder: Item, said: list[Item]) -> None:
-    holder.restated += said
+def _restate(holder: Item, said: list[Item]) -> bool:
+    """Hang figures on the ones that they say again; a product on a product number for number."""
+    if not _is_figure(holder) or any(m.slot for item in said for m in item.members or [item]):
+        return False
+    rows = [item.members or [item] for item in said]
+    members = holder.members or [holder]
+    if any(len(row) not in (1, len(members)) for row in rows):
+        return False
+    last = members[-1]
+    for row in rows:
+        for number, again in zip(members, row, strict=False) if len(row) > 1 else ((last, row[0]),):
+            number.restated.append(again)
+    last.end = max(last.end, said[-1].end)
+    return True
 
 
 def _equations(items: list[Item]) -> list[Item]:

@@ -14,6 +14,9 @@ POINTED = re.compile(r"(?<![\w.])0?\.\d")
 COMMAED = re.compile(r"(?<![\d.,])0,\d")
 GROUP = re.compile(r"\d{1,3}(?:,\d{3})+(?:\.\d+)?")
 SIZE_UNIT = re.compile(r"\s?(?:mm|lbs?|pcs|m|ft)\b", re.IGNORECASE)
+BARE_STEEL = re.compile(r"\d\.\d{4}")
+STEEL_GROUPS = re.compile(r"1\.4|2\.4|1\.0313|1\.1260|3\.70")
+MEASURED = re.compile(r"\s?(?:mm\b|um\b|in\b|inch|\"|thou|x\s?\d)", re.IGNORECASE)
 INCH_PARTS = (2, 4, 8, 16, 32, 64)
 NUMBER = re.compile(
     r"""(?:(?P<mixed>\d{1,2}(?:[ ]|-)\d{1,2}/(?:2|4|8|16|32|64)(?![\d.,]\d|\d))
@@ -59,19 +62,30 @@ def _item_at(text: str, row: list[tuple[str, int, int]], index: int, lists: bool
     at_edge = start == 0 or not (text[start - 1].isalnum() or text[start - 1] == "_")
     if at_edge and (code := code_at(text, start)) and not _is_spoken(code.group()):
         return Item("code", code.group(), start, code.end())
-    if at_edge and (named := DESIGNATION.match(text, start)):
+    if at_edge and (named := DESIGNATION.match(text, start)) and not _is_measured(text, named):
         return _designation(named)
+    phrase = longest(row, index)
+    if phrase and key.isdecimal() and row[phrase[0] - 1][0].isalpha():
+        stop = row[phrase[0] - 1][2]
+        return Item("term", text[start:stop], start, stop, senses=dict(phrase[1]))
     if (key[-1:].isdecimal() or key in ".,") and (item := _number(text, start, lists)):
         return item
-    if found := longest(row, index):
-        stop = row[found[0] - 1][2]
-        return Item("term", text[start:stop], start, stop, senses=dict(found[1]))
+    if phrase:
+        stop = row[phrase[0] - 1][2]
+        return Item("term", text[start:stop], start, stop, senses=dict(phrase[1]))
     return _word(text, start, end)
 
 
 def _designation(named: re.Match[str]) -> Item:
     kind = next(k for k in ("certificate", "date", "standard", "split", "alloy") if named.group(k))
     return Item(kind, named.group(), named.start(), named.end())
+
+
+def _is_measured(text: str, named: re.Match[str]) -> bool:
+    """True for a length that looks like a steel's number: 1.4375 in, 1.3081 x 1.1317 mm."""
+    if not BARE_STEEL.fullmatch(named.group()):
+        return False
+    return bool(MEASURED.match(text, named.end())) or not STEEL_GROUPS.match(named.group())
 
 
 def _is_spoken(code: str) -> bool:

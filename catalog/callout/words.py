@@ -202,7 +202,7 @@ def _kinds(draft: Draft) -> None:
         item.taken = "kind of goods"
         draft.is_sieve = True
     for item in draft.items:
-        if item.has("slot") and re.match(r"slot|oblong", item.text, re.IGNORECASE):
+        if item.has("slot") and re.match(r"slot|oblong|rect", item.text, re.IGNORECASE):
             draft.is_slotted = True
             item.taken = item.taken or "kind of goods"
     for item in draft.terms("hardware"):

@@ -8,7 +8,7 @@ WEAVES: dict[str, str] = {
         " tela liscia, armatura tela, armatura liscia, liscio, effen, полотняное, полотняного переплетения, over and under"
     ),
     "twilled": (
-        "twill, twilled, twill weave, twilled weave, tw, 2/2 twill, twill 2/2, 2x2 twill, twill 2x2, twilled square weave,"
+        "twill, twilled, twill weave, twilled weave, tw, 2/2 twill, 2/2 twilled, 2/2 twill weave, 2/2 twilled weave, twill 2/2, 2x2 twill, twill 2x2, twilled square weave,"
         " koperbindung, koeperbindung, koper, koeper, kopergewebe, croise, serge, armure croisee, armure serge, sarga, asargado, saia,"
         " diagonal, saglia, armatura saglia, a saglia, keper, саржевое, саржевого переплетения, twld"
     ),
@@ -103,14 +103,14 @@ GRADES: dict[str, str] = {
 PRODUCTS = (
     "weave, wire cloth, wirecloth, wire-cloth, wire mesh, wiremesh, wire screen, wire screening, woven wire, woven wire cloth, woven wire mesh, woven mesh, woven,"
     " woven wire screen, woven cloth, cloth, screen, screens, screening, scrn, screen cloth, gauze, wire gauze, wire fabric,"
-    " netting woven, fabric, metal cloth, metal fabric, metallic cloth, square mesh, square weave, square woven, square square, sq, sq mesh,"
+    " netting woven, fabric, metal cloth, metal fabric, metallic cloth, square, square weave, square woven, sq,"
     " sq weave, sqm weave, industrial wire cloth, space cloth, space screen, vibrating screen, strainer, strainer mesh, wire netting, cloth wire,"
     " insect screen, insect screening, fly screen, flyscreen, insect mesh, wire filter cloth, screen mesh, screen wire,"
     " drahtgewebe, gewebe, edelstahlgewebe, drahtsieb, metallgewebe, drahttuch, quadratgewebe, quadratmaschengewebe, quadratmaschen, siebboden,"
-    " toile, toile metallique, toiles metalliques, toile tissee, tissu metallique, treillis, grillage tisse, toile inox,"
+    " toile, toile metallique, toiles metalliques, toile tissee, tissu metallique, treillis, grillage tisse,"
     " tela metalica, tela, tejido, tejido metalico, malla tejida, malla metalica, malla de alambre, tejido de alambre,"
     " rete metallica, tela metallica, tessuto metallico, rete, tessuto, metaalgaas, gaas, сетка, сетка тканая, сетка проволочная, сетка проволочная тканая,"
-    " wire cloth woven, rectangular, rectangular mesh, rectangular weave, rectangular opening, rectangular openings, oblong, oblong mesh, broad mesh,"
+    " wire cloth woven, rectangular, rectangular weave, oblong, broad,"
     " tamices, heavy duty, hd, rect"
 )
 """What the goods are called; says nothing more of them."""

@@ -20,7 +20,7 @@ SLOTS: dict[str, str] = {
         " luz, luz de malla, luz de la malla, luz malla, abertura, abertura de malla, apertura, apertura de malla, abertura de malha,"
         " luce, luce netta, luce maglia, luce di maglia, apertura maglia, apertura di maglia, apertura netta,"
         " maaswijdte, размер ячейки, ячейка, ячейки, яч, slot, slots, slotted, slotted opening, slot opening,"
-        " oblong opening, slot width"
+        " oblong opening, oblong openings, rectangular opening, rectangular openings, slot width"
     ),
     "pitch": (
         "pitch, c/c, cc, c-c, c to c, ctc, o/c, oc, o c, on center, on centers, on centre, on centres, centres, centers, crs, ctrs,"
