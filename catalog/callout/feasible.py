@@ -52,7 +52,8 @@ def mm(value: Fraction) -> str:
 def _no_length(side: Side) -> Fault | None:
     for name, length in (("pitch", side.pitch), ("wire", side.wire), ("opening", side.aperture)):
         if length is not None and length.written and length.mm <= 0:
-            return Fault("E_IMPOSSIBLE", f"A {name} of {mm(length.mm)} is no {name}.")
+            article = "An" if name == "opening" else "A"
+            return Fault("E_IMPOSSIBLE", f"{article} {name} of {mm(length.mm)} is no {name}.")
     return None
 
 

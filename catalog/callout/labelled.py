@@ -255,11 +255,13 @@ def _designations(draft: Draft) -> None:
             continue
         number.taken = "count"
         sieve, count = sieve_option(draft, number), count_option(number)
-        german = count_in_german(draft, number) if draft.is_metric_tongue and not draft.is_sieve else None
-        if draft.is_sieve and sieve:
+        is_german = (draft.is_metric_tongue or number.system == "Nr") and not draft.standards
+        german = count_in_german(draft, number) if is_german else None
+        if german and count:
+            named = [replace(sieve, likelihood=POSSIBLE)] if draft.is_sieve and sieve else []
+            draft.choices.append([german, *named, count])
+        elif draft.is_sieve and sieve:
             draft.choices.append([sieve])
-        elif german and count:
-            draft.choices.append([german, count])
         elif sieve and count:
             draft.choices.append(
                 [sieve, replace(count, likelihood=POSSIBLE)]

@@ -181,6 +181,7 @@ def _numbers_behind_signs(items: list[Item]) -> list[Item]:
             return None
         if number.unit is None:
             number.unit = "designation"
+            number.system = "Nr" if sign.text.lower().startswith("nr") else None
         return join(sign, number, number), behind + 1
 
     return rewrite(items, rule)

@@ -6,6 +6,7 @@ from fractions import Fraction
 from catalog.callout.combining import Clash, Combined, combine
 from catalog.callout.draft import USUAL, Claim, Draft, Option
 from catalog.callout.feasible import fault_of, mm
+from catalog.callout.reading import Side
 from catalog.reference import sieves
 from catalog.units import MM_PER_INCH, Length
 
@@ -29,6 +30,11 @@ class Mended:
     notes: tuple[str, ...] = ()
 
 
+def _name(slot: str, side: Side) -> str:
+    """What a figure is called: a pitch that was counted is a count."""
+    return "pitch" if slot == "pitch" and not side.by_count else NAMES[slot]
+
+
 def clash_message(clash: Clash) -> str:
     """The contradiction in one sentence with its numbers."""
     if clash.kind == "spelling":
@@ -46,11 +52,11 @@ def mend_clash(draft: Draft, made: Combined) -> list[Mended]:
     if clash.kind == "spelling":
         for length in clash.lengths:
             claims = [c for c in made.claims if c.slot != clash.slot or length in (c.warp, c.weft)]
-            found.append(_mended(draft, made, claims, f"{NAMES[clash.slot]} {mm(length.mm)}"))
+            found.append(_mended(draft, made, claims, f"{_name(clash.slot, made.warp)} {mm(length.mm)}"))
     else:
         for dropped in ("aperture", "pitch", "wire"):
             claims = [c for c in made.claims if c.slot != dropped]
-            kept = " and ".join(NAMES[s] for s in ("pitch", "aperture", "wire") if s != dropped)
+            kept = " and ".join(_name(s, made.warp) for s in ("pitch", "aperture", "wire") if s != dropped)
             found.append(_mended(draft, made, claims, kept))
         found = _with_sieve(made, found)
     return [m for m in found if not m.made.clashes and fault_of(m.made, draft.weave, draft.is_dutch) is None]

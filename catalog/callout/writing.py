@@ -13,7 +13,13 @@ from catalog.units import MM_PER_INCH, decimal_text
 
 MOST_DECIMALS = 6
 LEAST_DIGITS = 4
-ALLOY_WORDS = {"CS": "carbon steel", "GALV": "galvanised steel", "HCS": "spring steel", "65Mn": "65Mn", "904L": "stainless 904L"}
+ALLOY_WORDS = {
+    "CS": "carbon steel",
+    "GALV": "galvanised steel",
+    "HCS": "spring steel",
+    "65Mn": "65Mn",
+    "904L": "stainless 904L",
+}
 FAMILY_WORDS = {"brass": "brass", "bronze": "phosphor bronze", "copper": "copper"}
 
 
@@ -88,12 +94,20 @@ def _square_figures(construction: Construction) -> list[str]:
     apertures, wires = [s.aperture_mm for s in sides], [s.wire_mm for s in sides]
     least = max(_fewest_digits(s.pitch_mm) for s in sides) + 1
     area = 100 * apertures[0] * apertures[1] / (sides[0].pitch_mm * sides[1].pitch_mm)
-    return [f"aperture {_twice(apertures, least=least)}", f"wire {_twice(wires)}", f"pitch {_pitches([s.pitch_mm for s in sides])}", f"open area {float(area):.1f} %"]
+    return [
+        f"aperture {_twice(apertures, least=least)}",
+        f"wire {_twice(wires)}",
+        f"pitch {_pitches([s.pitch_mm for s in sides])}",
+        f"open area {float(area):.1f} %",
+    ]
 
 
 def _filter_figures(construction: Construction) -> list[str]:
     sides = (construction.warp, construction.weft)
-    return [f"pitch {_pitches([s.pitch_mm for s in sides])}", f"wire {_twice([s.wire_mm for s in sides], always_two=True)}"]
+    return [
+        f"pitch {_pitches([s.pitch_mm for s in sides])}",
+        f"wire {_twice([s.wire_mm for s in sides], always_two=True)}",
+    ]
 
 
 def _twice(lengths: Sequence[Fraction], always_two: bool = False, least: int = LEAST_DIGITS) -> str:
@@ -122,7 +136,9 @@ def spelled(values: Sequence[Fraction], least: int = LEAST_DIGITS) -> list[str]:
     """One quantity in several units: the exact spellings as they are, the others rounded to more digits than those."""
     exact = [decimal_text(value, MOST_DECIMALS) for value in values]
     fewest = min((_digits(text) for text in exact if text), default=0)
-    return [text or _rounded(value, max(LEAST_DIGITS, least, fewest + 1)) for text, value in zip(exact, values, strict=True)]
+    return [
+        text or _rounded(value, max(LEAST_DIGITS, least, fewest + 1)) for text, value in zip(exact, values, strict=True)
+    ]
 
 
 def _digits(text: str) -> int:

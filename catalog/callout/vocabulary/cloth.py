@@ -9,7 +9,7 @@ WEAVES: dict[str, str] = {
     ),
     "twilled": (
         "twill, twilled, twill weave, twilled weave, tw, 2/2 twill, 2/2 twilled, 2/2 twill weave, 2/2 twilled weave, twill 2/2, 2x2 twill, twill 2x2, twilled square weave,"
-        " koperbindung, koeperbindung, koper, koeper, kopergewebe, croise, serge, armure croisee, armure serge, sarga, asargado, saia,"
+        " koperbindung, koeperbindung, koper, koeper, kopergewebe, croise, croisee, toile croisee, serge, armure croisee, armure serge, sarga, asargado, saia,"
         " diagonal, saglia, armatura saglia, a saglia, keper, саржевое, саржевого переплетения, twld"
     ),
     "reverse twilled": "reverse twill, reverse twilled, reversed twill, rev twill, broken twill, fischgrat, herringbone, zigzag twill",
@@ -106,7 +106,7 @@ PRODUCTS = (
     " netting woven, fabric, metal cloth, metal fabric, metallic cloth, square, square weave, square woven, sq,"
     " sq weave, sqm weave, industrial wire cloth, space cloth, space screen, vibrating screen, strainer, strainer mesh, wire netting, cloth wire,"
     " insect screen, insect screening, fly screen, flyscreen, insect mesh, wire filter cloth, screen mesh, screen wire,"
-    " drahtgewebe, gewebe, edelstahlgewebe, drahtsieb, metallgewebe, drahttuch, quadratgewebe, quadratmaschengewebe, quadratmaschen, siebboden,"
+    " drahtgewebe, gewebe, carre, carree, carres, carrees, cuadrada, cuadrado, quadra, quadrata, quadratisch, drahtsieb, metallgewebe, drahttuch, quadratgewebe, quadratmaschengewebe, quadratmaschen, siebboden,"
     " toile, toile metallique, toiles metalliques, toile tissee, tissu metallique, treillis, grillage tisse,"
     " tela metalica, tela, tejido, tejido metalico, malla tejida, malla metalica, malla de alambre, tejido de alambre,"
     " rete metallica, tela metallica, tessuto metallico, rete, tessuto, metaalgaas, gaas, сетка, сетка тканая, сетка проволочная, сетка проволочная тканая,"

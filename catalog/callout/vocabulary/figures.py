@@ -16,7 +16,7 @@ SLOTS: dict[str, str] = {
         " aperture width, opening size, aperture size, hole, holes, hole size, space, spacing clear, sieve opening,"
         " screen opening, light opening, pore, pores, sq hole, square hole, square holes,"
         " maschenweite, lichte maschenweite, lichte weite, mw, lw, nennmaschenweite, maschenoffnung, offnung, siebweite,"
-        " maille, mailles, ouverture, ouverture de maille, vide de maille, vide, ouverture nominale, jour,"
+        " maille, mailles, maille carree, mailles carrees, ouverture, ouverture de maille, vide de maille, vide, ouverture nominale, jour,"
         " luz, luz de malla, luz de la malla, luz malla, abertura, abertura de malla, apertura, apertura de malla, abertura de malha,"
         " luce, luce netta, luce maglia, luce di maglia, apertura maglia, apertura di maglia, apertura netta,"
         " maaswijdte, размер ячейки, ячейка, ячейки, яч, slot, slots, slotted, slotted opening, slot opening,"

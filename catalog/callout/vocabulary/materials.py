@@ -3,7 +3,7 @@
 
 MATERIALS: dict[str, str] = {
     "stainless": (
-        "stainless, stainless steel, ss, sst, sts, s/s, stnls, stainl, stainless stl, st stl, s steel, cres, corrosion resistant steel, inox, acier inox, acier inoxydable, inoxydable,"
+        "stainless, edelstahlgewebe, edelstahldraht, edelstahldrahtgewebe, stainless steel, ss, sst, sts, s/s, stnls, stainl, stainless stl, st stl, s steel, cres, corrosion resistant steel, inox, acier inox, acier inoxydable, inoxydable,"
         " edelstahl, rostfrei, rostfreier stahl, rostfr, nichtrostend, nichtrostender stahl, acero inoxidable, inoxidable, ac inox, acciaio inox, acciaio inossidabile, inossidabile, rvs, нержавеющая,"
         " нержавейка, нерж, s s"
     ),
@@ -15,13 +15,13 @@ MATERIALS: dict[str, str] = {
         "high carbon, high-carbon, hi-carbon, hi carbon, hicarbon, high carbon steel, high-carbon steel, hc, hcs, hc steel, spring steel, federstahl, oil tempered, oil tempered steel, high tensile, high tensile steel,"
         " ht steel, hts, hochgekohlt, acier a ressort, acier haut carbone, acero de muelles, acciaio armonico, spring federstahldraht, manganese steel, hi-tensile, hi tensile"
     ),
-    "brass": "brass, brs, messing, ms, laiton, laton, ottone, латунь, messingdraht",
-    "bronze": "bronze, brz, bronce, bronzo, bronzedraht",
+    "brass": "brass, brs, messinggewebe, messing, ms, laiton, laton, ottone, латунь, messingdraht",
+    "bronze": "bronze, brz, bronzegewebe, bronce, bronzo, bronzedraht",
     "phosphor bronze": (
         "phosphor bronze, phos bronze, phosphorus bronze, ph bronze, phos brz, ph brz, phosbronze, ph br, phosphor brz, pb wire, p bronze, zinnbronze, phosphorbronze, bronze phosphoreux,"
         " bronce fosforoso, bronzo fosforoso, phosphorous bronze, phos bz, фосфористая бронза, tin bronze"
     ),
-    "copper": "copper, cu, kupfer, cuivre, cobre, rame, медь, kupferdraht, cop",
+    "copper": "copper, cu, kupfergewebe, kupfer, cuivre, cobre, rame, медь, kupferdraht, cop",
     "aluminium": "aluminium, aluminum, alum, alu, al, alloy aluminium, aluminio, alluminio, алюминий",
     "nickel": "nickel, ni, pure nickel, reinnickel, niquel, nichel, никель",
     "titanium": "titanium, titan, titane, titanio, титан",

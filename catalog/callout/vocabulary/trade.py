@@ -103,7 +103,7 @@ RATINGS: dict[str, str] = {
     "absolute": "absolute, abs, absolute rating, absolut, absolue, absoluto, assoluto, absolute filtration",
     "unstated": "filter rating, rating, filtration rating, filterfeinheit, feinheit, finesse, micron rating, filtration, filtration fineness",
 }
-BAND = "passing, minus, undersize"
+BAND = "passing, minus, undersize, retained on, held on, plus, oversize, retained, through"
 RANGES = "to, thru, through, bis, until, until and including, up to and including, till"
 BETWEEN = "between, from, zwischen, von, entre, fra, tra, range, within"
 BY = "by, auf, per, sur, par, por"
