@@ -11,7 +11,7 @@ from catalog.stock.cutting_pieces import Piece
 from catalog.stock.cutting_search import Effort
 from catalog.stock.layout import LotCut
 from catalog.stock.lots import Lot
-from catalog.stock.plan_choice import FILLING, Choice, Chooser, heat_of, rank, usable_m2
+from catalog.stock.plan_choice import FILLING, STARTS, Choice, Chooser, heat_of, rank, usable_m2
 from catalog.stock.plan_reasons import reasons
 
 FINAL = Effort(40, 4)
@@ -115,7 +115,7 @@ def _complete(chooser: Chooser, pool: Sequence[Lot]) -> list[Choice]:
     if single:
         nothing = (0,) * len(chooser.asked)
         return [Choice(((lot, chooser.asked),), nothing) for lot in single]
-    choice = chooser.cover(pool)
+    choice = chooser.cover(pool, STARTS if len({heat_of(lot) for lot in pool}) <= max(GROUPS) else 1)
     return [choice] if choice.is_complete else []
 
 
