@@ -7,9 +7,11 @@ from pathlib import Path
 from typing import Any
 
 from textual.app import App
+from textual.events import Event, Key
 from textual.theme import Theme
 
 from tui.door import OpenStore
+from tui.keyboard import Keyboard, Settled
 from tui.memory import Memory
 from tui.presenting import UNITS
 from tui.screens.desk import Desk
@@ -59,7 +61,7 @@ class CrossclothApp(App[None]):
         self.desk = Desk(
             opener, self.memory, units if units in UNITS else remembered, ascii_only, keys or {}, directory
         )
-        self._keys = {name: own for name, own in (keys or {}).items() if own}
+        self.keyboard = Keyboard(self, super().on_event)
         self._dress(ascii_only)
 
     def _dress(self, ascii_only: bool) -> None:
@@ -78,10 +80,19 @@ class CrossclothApp(App[None]):
         """The desk."""
         return self.desk
 
+    async def on_event(self, event: Event) -> None:
+        """Keys go by way of the keyboard."""
+        if isinstance(event, Key) and not event.is_forwarded:
+            await self.keyboard.strike(event)
+        else:
+            await super().on_event(event)
+
+    async def on_settled(self, event: Settled) -> None:
+        """Hand on the keys that waited."""
+        await self.keyboard.release()
+
     def on_mount(self) -> None:
-        """Take the user's keys, and leave a clean terminal when told to end."""
-        if self._keys:
-            self.set_keymap(self._keys)
+        """Leave a clean terminal when told to end."""
         if not self.is_headless:
             self._mind_signals()
         self.call_after_refresh(gc.enable)

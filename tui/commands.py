@@ -27,7 +27,12 @@ class Command:
     hinted: bool = False
     """True where the line of hints shows it."""
     while_typing: bool = False
-    """True where it works in an input line as well: function keys, Enter, Esc, Tab."""
+    """True where its keys that are no letters work in an input line as well."""
+
+    @property
+    def reads_list(self) -> bool:
+        """True where it is about the highlighted row or the list, and so waits for the list that is asked for."""
+        return self.where == LIST or self.id in ABOUT_THE_LIST
 
 
 COMMANDS: tuple[Command, ...] = (
@@ -61,10 +66,10 @@ COMMANDS: tuple[Command, ...] = (
     Command("retry", ("f7", "r"), "Try again", "Open the store again after it failed, or read it afresh.", EVERYWHERE,
             while_typing=True),
     Command("quit", ("f10", "q"), "Quit", "Leave; what was typed comes back next time.", EVERYWHERE, True, True),
-    Command("row_down", ("down", "j"), "Down", "Go to the next row.", LIST),
-    Command("row_up", ("up", "k"), "Up", "Go to the row before.", LIST),
-    Command("page_down", ("pagedown", "ctrl+f"), "Page down", "Go down by a page.", LIST),
-    Command("page_up", ("pageup", "ctrl+b"), "Page up", "Go up by a page.", LIST),
+    Command("row_down", ("down", "j"), "Down", "Go to the next row.", LIST, while_typing=True),
+    Command("row_up", ("up", "k"), "Up", "Go to the row before.", LIST, while_typing=True),
+    Command("page_down", ("pagedown", "ctrl+f"), "Page down", "Go down by a page.", LIST, while_typing=True),
+    Command("page_up", ("pageup", "ctrl+b"), "Page up", "Go up by a page.", LIST, while_typing=True),
     Command("first_row", ("home",), "First", "Go to the first row.", LIST),
     Command("last_row", ("end", "G"), "Last", "Go to the last row.", LIST),
     Command("columns_right", ("right",), "Columns", "Show the columns further right.", LIST),
@@ -97,6 +102,10 @@ COMMANDS: tuple[Command, ...] = (
     Command("lot_cloth", ("d",), "Its cloth", "Go to the cloth of the highlighted lot.", STOCK, True),
     Command("next_table", ("t", "tab"), "Next table", "Go to the next table.", TABLES, True),
 )  # fmt: skip
+
+ABOUT_THE_LIST = frozenset(
+    {"copy", "write", "view", "mark", "compare", "plot", "lots", "as_callout", "cloth_lots", "lot_cloth"}
+)
 
 GLYPHS: Mapping[str, str] = {
     "question_mark": "?", "slash": "/", "colon": ":", "equals_sign": "=", "hash": "#", "escape": "Esc",

@@ -93,6 +93,10 @@ class Door:
         """True while an answer that counts is outstanding."""
         return bool(self._newest)
 
+    def awaits(self, *kinds: str) -> bool:
+        """True while an answer of one of these kinds is outstanding, from a store that is open."""
+        return self.is_open and any(kind in self._newest for kind in kinds)
+
     def open(self) -> None:
         """Open the store, again where it failed before. What waits is asked then."""
         if self._thread is not None and self._thread.is_alive():

@@ -328,7 +328,7 @@ async def _(d: Driver, key: str) -> None:
     await d.press("slash")
     d.desk.place.line.value = "60"  # type: ignore[union-attr]
     await d.settle()
-    assert "2 sieve No. 60" in d.text
+    assert "2 opens 0.25 mm" in d.text
     alive = d.desk.place.understanding.surviving  # type: ignore[attr-defined]
     assert len(alive) > 1
     await d.press("escape", key)

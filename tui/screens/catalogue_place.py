@@ -1,16 +1,14 @@
 """Catalogue: every cloth by its figures; limits typed in words narrow the list."""
 
 from collections.abc import Mapping, Sequence
-from typing import TYPE_CHECKING, Any, ClassVar
+from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.binding import BindingType
 from textual.containers import Container, Horizontal
 from textual.widgets import Input
 
 from tui.commands import CATALOGUE
-from tui.presenting import Line, fit, harmless, plain
-from tui.screens.keys import bindings
+from tui.presenting import Line, fit, harmless, phrases, plain
 from tui.screens.place import Place
 from tui.screens.store_pages import StorePages
 from tui.widgets.callout_input import LineInput
@@ -36,7 +34,6 @@ class CataloguePlace(Place):
 
     where = CATALOGUE
     title = "Catalogue"
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(CATALOGUE)]
 
     def __init__(self, *, id: str) -> None:  # noqa: A002
         super().__init__(id=id)
@@ -46,6 +43,10 @@ class CataloguePlace(Place):
         self.stocked = False
         self.total: int | None = None
         self.lots: dict[str, Sequence[Lot]] = {}
+
+    def awaits(self) -> bool:
+        """True while an answer for the list is on its way."""
+        return self.desk.door.awaits("count", "page 0", "page 1")
 
     def compose(self) -> ComposeResult:
         """The line for limits, what is shown, the list, the highlighted cloth."""
@@ -118,11 +119,6 @@ class CataloguePlace(Place):
         text = harmless(event.value, 4000)
         self.understanding = callout.read(text) if text.strip() else None
         self._count()
-
-    def on_input_submitted(self, event: Input.Submitted) -> None:
-        """On to the list."""
-        event.stop()
-        self.table.focus()
 
     def _count(self) -> None:
         filters = self.filters()
@@ -233,8 +229,9 @@ class CataloguePlace(Place):
             said.append("on the rack only")
         said += self._limits_said()
         right = f"{self.table.cursor + 1:,} of {self.total:,} ".replace(",", " ") if self.total else ""
-        left = fit(self.spelled(" " + " · ".join(said)), max(0, width - len(right) - 1))
-        return self.spelled_lines([((left + " ", "muted"), (right, "muted"))])
+        parts = phrases([self.spelled(x) for x in said], self.spelled(" · "), width - len(right) - 2)
+        first = fit(f" {parts[0]}", max(0, width - len(right) - 1)) + right
+        return self.spelled_lines([((first + " ", "muted"),), *(((f" {part}", "muted"),) for part in parts[1:2])])
 
     def _limits_said(self) -> list[str]:
         from tui.widgets.reading_lines import limit_words

@@ -2,20 +2,18 @@
 
 from collections.abc import Callable, Mapping
 from pathlib import Path
-from typing import ClassVar
 
 from textual.app import ComposeResult
-from textual.binding import BindingType
 from textual.containers import Container
-from textual.events import Click, DescendantFocus, Key, Resize
+from textual.events import Click, Resize
 from textual.screen import Screen
 from textual.widgets import Input
 
-from tui.commands import EVERYWHERE, PLACES, Command, at, by_id, glyph, keys_of
+from tui.commands import EVERYWHERE, LIST, PLACES, Command, at, by_id, glyph, keys_of
 from tui.door import Door, OpenStore
+from tui.keyboard import Settled
 from tui.memory import Memory
 from tui.presenting import UNITS, Line, Piece, harmless, plain, wrapped
-from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.line_view import LineView
 
@@ -55,8 +53,6 @@ def _make(place: str) -> Place:
 class Desk(Screen[None]):
     """Holds the store's door, what is remembered, the units; and the place in front."""
 
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(EVERYWHERE)]
-
     def __init__(
         self,
         opener: Callable[[], OpenStore],
@@ -76,7 +72,6 @@ class Desk(Screen[None]):
         self._message = ""
         self._history: list[str] = []
         self.place_id = memory.place if memory.place in PLACES else "match"
-        self._hold_message = False
         self._spans: dict[str, tuple[int, int]] = {}
 
     def compose(self) -> ComposeResult:
@@ -139,30 +134,53 @@ class Desk(Screen[None]):
     def _spelled(self, text: str) -> str:
         return plain(text) if self.ascii_only else text
 
+    @property
+    def is_typing(self) -> bool:
+        """True while keys go into a line."""
+        return isinstance(self.focused, Input)
+
+    def command_of(self, key: str) -> Command | None:
+        """What a key sets off in the place in front."""
+        here = [command for where in (self.place_id, LIST, EVERYWHERE) for command in at(where)]
+        here.sort(key=lambda command: command.id not in self.own_keys)  # a user's own keys come first
+        return next((c for c in here if key in keys_of(c, self.own_keys)), None)
+
+    def must_wait(self, key: str) -> bool:
+        """True where a key is about the list, and what the list is to show is on its way."""
+        command = self.command_of(key)
+        return command is not None and command.reads_list and self.place.awaits()
+
+    async def obey(self, key: str) -> bool:
+        """Do what a key sets off here; False where it sets off nothing."""
+        if self._message:
+            self._message = ""
+            self._draw_frame()
+        command = self.command_of(key)
+        if command is None or (self.is_typing and not command.while_typing):
+            return False
+        await self.run_command(command.id, key)
+        return True
+
+    async def run_command(self, command_id: str, key: str = "1") -> None:
+        """Do a command by its id; *key* says which answer is meant."""
+        name = f"action_{command_id}"
+        action = getattr(self.place, name, None) or getattr(self, name)
+        done = action(int(key)) if command_id == "answer" else action()
+        if done is not None:
+            await done
+
+    def line_was_read(self) -> None:
+        """Keys that waited for the line may go on."""
+        self.app.keyboard.is_submitting = False  # type: ignore[attr-defined]
+        self.app.post_message(Settled())
+
     def say(self, sentence: str) -> None:
         """Say something in the line of hints, until the next key."""
         self._message = harmless(sentence)
-        self._hold_message = True
         self._draw_frame()
 
     def _draw_frame(self) -> None:
         self.query_one("#places", LineView).show(self._places_line)
-        self.query_one("#hints", LineView).show(self._hints_line)
-
-    async def on_key(self, event: Key) -> None:
-        """What was said has been seen. Esc and a quick letter come as one key through some terminals."""
-        if event.key.startswith("alt+") and len(event.key) == len("alt+x"):
-            event.stop()
-            event.prevent_default()
-            await self.action_back()
-            self.app.simulate_key(event.key[-1])
-        if self._message and not self._hold_message:
-            self._message = ""
-            self._draw_frame()
-        self._hold_message = False
-
-    def on_descendant_focus(self, event: DescendantFocus) -> None:
-        """Other hints for other things."""
         self.query_one("#hints", LineView).show(self._hints_line)
 
     async def on_click(self, event: Click) -> None:
@@ -218,6 +236,7 @@ class Desk(Screen[None]):
     def on_door_came(self, message: Door.Came) -> None:
         """An answer: handed on unless a newer question was asked."""
         self.door.take(message)
+        self.app.post_message(Settled())
 
     async def action_go_match(self) -> None:
         """To the match place."""
@@ -241,7 +260,7 @@ class Desk(Screen[None]):
         if place.leave_inner():
             return
         if isinstance(self.focused, Input):
-            place.table.focus()
+            self.set_focus(place.table)
         elif self.door.is_open and self.door.is_busy:
             self.door.stop()
             self.say("Stopped. Change anything to ask again.")
@@ -251,7 +270,7 @@ class Desk(Screen[None]):
     def action_input(self) -> None:
         """To the line to type in."""
         if (line := self.place.line) is not None:
-            line.focus()
+            self.set_focus(line)
         else:
             self.place.action_find()
 
@@ -317,8 +336,7 @@ class Desk(Screen[None]):
         """Run what was chosen by name."""
         if command_id is None:
             return
-        target = self if command_id in {c.id for c in at(EVERYWHERE)} else self.place
-        await self.app.run_action("answer(1)" if command_id == "answer" else command_id, target)
+        await self.run_command(command_id)
 
     def action_retry(self) -> None:
         """Open the store again, or ask again."""

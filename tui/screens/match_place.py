@@ -1,16 +1,14 @@
 """Match: a callout in, the nearest cloths out, each set against what was asked."""
 
 from collections.abc import Callable, Sequence
-from typing import TYPE_CHECKING, Any, ClassVar
+from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.binding import BindingType
 from textual.containers import Container, Horizontal
 from textual.widgets import Input
 
 from tui.commands import MATCH
 from tui.presenting import SEALS, Line, fit, harmless, phrases, plain, significant
-from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.callout_input import LineInput
 from tui.widgets.inks import text_of
@@ -37,7 +35,6 @@ class MatchPlace(Place):
 
     where = MATCH
     title = "Match"
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(MATCH)]
 
     def __init__(self, *, id: str) -> None:  # noqa: A002
         super().__init__(id=id)
@@ -51,6 +48,10 @@ class MatchPlace(Place):
         self.spots: Sequence[Spot] = ()
         self.spot: Spot | None = None
         self._asked = False
+
+    def awaits(self) -> bool:
+        """True while an answer for the list is on its way."""
+        return self.desk.door.awaits("match")
 
     def compose(self) -> ComposeResult:
         """The line, the reading, the state of the search, the list and the detail."""
@@ -66,6 +67,7 @@ class MatchPlace(Place):
     def on_mount(self) -> None:
         """Read what was typed last time; the store is asked when it is open."""
         self.say_in_list(("Opening the store…", "muted"))
+        self.watch(self.input, "value", self._keep, init=False)
         self.input.select_all()  # what was typed last time stays until something else is typed
         self.call_after_refresh(self._read)
 
@@ -93,7 +95,7 @@ class MatchPlace(Place):
 
     def settle(self) -> None:
         """To the line, where there is nothing in the list yet."""
-        (self.table if self.answer and self.answer.candidates else self.input).focus()
+        self.focus_on(self.table if self.answer and self.answer.candidates else self.input)
 
     def arrive(self, carried: object = None) -> None:
         """A callout may be carried along from another place."""
@@ -107,15 +109,20 @@ class MatchPlace(Place):
         self._ask()
 
     def on_input_changed(self, event: Input.Changed) -> None:
-        """Read again on each change."""
+        """Read again on each change, unless another follows already."""
         event.stop()
-        self.taken = None
-        self._read()
+        if event.value == self.input.value:
+            self.taken = None
+            self._read()
 
-    def on_input_submitted(self, event: Input.Submitted) -> None:
-        """On to the list."""
-        event.stop()
-        self.table.focus()
+    def _keep(self, typed: str) -> None:
+        """What is typed is remembered at once, whatever happens next."""
+        self.desk.memory.callout = typed
+
+    def line_read(self) -> None:
+        """The line may hold letters whose change has not been told yet."""
+        self._read()
+        super().line_read()
 
     def _read(self) -> None:
         """Understand what is typed, and ask the store for it."""
@@ -125,7 +132,6 @@ class MatchPlace(Place):
         if self.understanding is not None and self.understanding.text == text and self._asked:
             return
         self.understanding = callout.read(text)
-        self.desk.memory.callout = self.input.value
         self.query_one("#reading", LineView).show(self._reading_lines)
         self._ask()
 
@@ -287,9 +293,8 @@ class MatchPlace(Place):
         # the line to type in begins behind its label
         label = 9
         cautions = self.answer.cautions if self.answer is not None else ()
-        lines = reading_lines(
-            self.understanding, width, self.desk.units, self.input.text_offset - label, self.taken, cautions
-        )
+        offset = self.input.text_offset - label
+        lines = reading_lines(self.understanding, width, self.desk.units, offset, self.taken, cautions)
         return self.spelled_lines(lines)
 
     def _status_line(self, width: int) -> Sequence[Line]:

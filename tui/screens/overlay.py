@@ -7,6 +7,7 @@ from textual.app import ComposeResult
 from textual.binding import Binding, BindingType
 from textual.screen import ModalScreen
 
+from tui.keyboard import Settled
 from tui.presenting import Line
 from tui.widgets.line_view import LineView
 
@@ -24,6 +25,8 @@ class Overlay(ModalScreen[None]):
         Binding("end", "scroll_by(1000)", "Last", show=False),
     ]
 
+    is_ready = False
+
     def lines(self, width: int) -> Sequence[Line]:
         """What is to be read, for this width."""
         raise NotImplementedError
@@ -31,6 +34,11 @@ class Overlay(ModalScreen[None]):
     def compose(self) -> ComposeResult:
         """One view."""
         yield LineView(self.lines, id="overlay")
+
+    def on_mount(self) -> None:
+        """Keys that waited may go on."""
+        self.is_ready = True
+        self.app.post_message(Settled())
 
     def action_scroll_by(self, rows: int) -> None:
         """Scroll."""

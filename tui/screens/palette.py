@@ -10,6 +10,7 @@ from textual.screen import ModalScreen
 from textual.widgets import Input
 
 from tui.commands import EVERYWHERE, LIST, Command, at, key_words
+from tui.keyboard import Settled
 from tui.presenting import Piece, plain
 from tui.widgets.callout_input import LineInput
 from tui.widgets.paged_table import Column, PagedTable
@@ -48,6 +49,7 @@ class Palette(ModalScreen[str | None]):
 
     def __init__(self, place: str, keys: Mapping[str, str], ascii_only: bool) -> None:
         super().__init__()
+        self.is_ready = False
         self._keys, self._ascii = keys, ascii_only
         self._all = at(place, EVERYWHERE, LIST)
 
@@ -61,7 +63,9 @@ class Palette(ModalScreen[str | None]):
     def on_mount(self) -> None:
         """Type at once."""
         self._list("")
-        self.query_one(LineInput).focus()
+        self.set_focus(self.query_one(LineInput))
+        self.is_ready = True
+        self.app.post_message(Settled())
 
     def _list(self, text: str) -> None:
         wanted = text.casefold().split()

@@ -3,13 +3,11 @@
 from collections.abc import Sequence
 from typing import TYPE_CHECKING, ClassVar, cast
 
-from textual.binding import BindingType
 from textual.containers import Vertical
+from textual.widget import Widget
 from textual.widgets import Input
 
-from tui.commands import LIST
 from tui.presenting import Line, plain
-from tui.screens.keys import bindings
 from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import Column, PagedTable
 
@@ -23,7 +21,6 @@ class Place(Vertical):
 
     where: ClassVar[str] = ""
     title: ClassVar[str] = ""
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(LIST)]
 
     @property
     def desk(self) -> "Desk":
@@ -47,7 +44,25 @@ class Place(Vertical):
 
     def settle(self) -> None:
         """Put the focus where work goes on."""
-        self.table.focus()
+        self.focus_on(self.table)
+
+    def focus_on(self, widget: Widget) -> None:
+        """Move the focus at once: the next key must find it there."""
+        self.desk.set_focus(widget)
+
+    def awaits(self) -> bool:
+        """True while what the list is to show is on its way, so that keys for the list have to wait."""
+        return False
+
+    def on_input_submitted(self, event: Input.Submitted) -> None:
+        """The line has been read: on to the list."""
+        event.stop()
+        self.line_read()
+
+    def line_read(self) -> None:
+        """Keys that waited for the line may go on."""
+        self.focus_on(self.table)
+        self.desk.line_was_read()
 
     def leave_inner(self) -> bool:
         """Close what is open within the place; False where nothing is."""
@@ -70,13 +85,13 @@ class Place(Vertical):
         detail = self.query_one("#detail", LineView)
         detail.can_focus = True
         self.add_class("-opened")
-        detail.focus()
+        self.focus_on(detail)
 
     def close_up(self) -> None:
         """Back to the list."""
         self.query_one("#detail", LineView).can_focus = False
         self.remove_class("-opened")
-        self.table.focus()
+        self.focus_on(self.table)
 
     def look_changed(self) -> None:
         """Units or theme have changed."""

@@ -8,6 +8,7 @@ from textual.containers import Horizontal
 from textual.screen import ModalScreen
 from textual.widgets import Input
 
+from tui.keyboard import Settled
 from tui.presenting import fit, plain
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
@@ -20,6 +21,7 @@ class Prompt(ModalScreen[str | None]):
 
     def __init__(self, label: str, value: str, ascii_only: bool) -> None:
         super().__init__()
+        self.is_ready = False
         self._label = plain(label) if ascii_only else label
         self._value = value
 
@@ -34,8 +36,10 @@ class Prompt(ModalScreen[str | None]):
     def on_mount(self) -> None:
         """Type at once."""
         line = self.query_one(LineInput)
-        line.focus()
+        self.set_focus(line)
         line.select_all()
+        self.is_ready = True
+        self.app.post_message(Settled())
 
     def on_input_submitted(self, event: Input.Submitted) -> None:
         """Done."""

@@ -1,16 +1,14 @@
 """Stock: the lots by location; a word narrows them; a cloth may be carried along from another place."""
 
 from collections.abc import Mapping, Sequence
-from typing import TYPE_CHECKING, Any, ClassVar
+from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.binding import BindingType
 from textual.containers import Horizontal
 from textual.widgets import Input
 
 from tui.commands import STOCK
 from tui.presenting import Line, Piece, fit, harmless, shortened, significant
-from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
@@ -78,13 +76,16 @@ class StockPlace(Place):
 
     where = STOCK
     title = "Stock"
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(STOCK)]
 
     def __init__(self, *, id: str) -> None:  # noqa: A002
         super().__init__(id=id)
         self.lots: Sequence[tuple[Lot, Cloth]] | None = None
         self.only: Cloth | None = None
         self.sort = "location"
+
+    def awaits(self) -> bool:
+        """True while an answer for the list is on its way."""
+        return self.desk.door.awaits("all lots")
 
     def compose(self) -> ComposeResult:
         """The line for words, what is shown, the list."""
@@ -124,11 +125,6 @@ class StockPlace(Place):
         """Narrow the list."""
         event.stop()
         self._list()
-
-    def on_input_submitted(self, event: Input.Submitted) -> None:
-        """On to the list."""
-        event.stop()
-        self.table.focus()
 
     def _list(self) -> None:
         if self.lots is None:

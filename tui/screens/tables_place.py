@@ -1,16 +1,14 @@
 """Tables: gauges, sieves, alloys, safety distances, each with its source."""
 
 from collections.abc import Sequence
-from typing import TYPE_CHECKING, Any, ClassVar
+from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.binding import BindingType
 from textual.containers import Horizontal
 from textual.widgets import Input
 
 from tui.commands import TABLES
 from tui.presenting import Line, Piece, fit, harmless, inch, significant, width_of
-from tui.screens.keys import bindings
 from tui.screens.place import Place
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
@@ -67,12 +65,15 @@ class TablesPlace(Place):
 
     where = TABLES
     title = "Tables"
-    BINDINGS: ClassVar[list[BindingType]] = [*bindings(TABLES)]
 
     def __init__(self, *, id: str) -> None:  # noqa: A002
         super().__init__(id=id)
         self.name_of_table = NAMES[0]
         self._tables: dict[str, Table] = {}
+
+    def awaits(self) -> bool:
+        """True while an answer for the list is on its way."""
+        return self.desk.door.awaits("table")
 
     def compose(self) -> ComposeResult:
         """The line for words, which table, the list, its source."""
@@ -153,11 +154,6 @@ class TablesPlace(Place):
         """Narrow the table."""
         event.stop()
         self._list()
-
-    def on_input_submitted(self, event: Input.Submitted) -> None:
-        """On to the list."""
-        event.stop()
-        self.table.focus()
 
     def look_changed(self) -> None:
         """Other colours or columns."""

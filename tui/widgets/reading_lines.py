@@ -21,7 +21,7 @@ from tui.presenting import (
 EMPTY_HINT = "Type what the drawing says:  60 x 60 mesh, .0075 wire, 304   or   0,25/0,16 1.4404 plain"
 SAID_BY_THEMSELVES = ("mesh", "aperture", "wire", "open_area", "pitch")
 """Parts that a word can name itself: 'opening' needs no label."""
-LABEL_ROOM = 34
+LABEL_ROOM = 24
 LIMIT_NAMES = {
     "aperture_mm": "aperture", "wire_mm": "wire", "pitch_mm": "pitch", "count_per_in": "count per inch",
     "open_area_pct": "open area", "mass_kg_m2": "mass per area",
@@ -198,11 +198,12 @@ def question_lines(understanding: Understanding, width: int, units: str, taken: 
         return [((part, "ask"),) for part in wrapped(f"? {question}", width, 2)[:2]]
     asked = question.partition(":")[0]
     lines: list[Line] = [((fit(f"? {asked}: answer with its number, outside the line.", width).rstrip(), "ask"),)]
-    for number, reading in enumerate(alive[:9], 1):
+    words = [answer_words(reading, units) for reading in alive[:9]]
+    room = min(max(map(width_of, words)), max(20, width - LABEL_ROOM))
+    for number, (reading, said) in enumerate(zip(alive, words, strict=False), 1):
         sign = ">" if taken == number - 1 else " "
-        label = fit(harmless(reading.label, 60), min(LABEL_ROOM, max(width_of(r.label) for r in alive)))
-        words = fit(f"{label}  {answer_words(reading, units)}", width - 3).rstrip()
-        lines.append(((f"{sign}{number} ", "key"), (words, "strong" if sign == ">" else "text")))
+        text = fit(f"{fit(said, room)}  {harmless(reading.label, 90)}", width - 3).rstrip()
+        lines.append(((f"{sign}{number} ", "key"), (text, "strong" if sign == ">" else "text")))
     return lines
 
 
