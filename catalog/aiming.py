@@ -8,7 +8,7 @@ from catalog.callout.reading import Form, Limits, Reading
 from catalog.construction import Weave
 from catalog.errors import InputError
 from catalog.reference import alloys
-from catalog.target import Need, Purpose, Target, Tolerance
+from catalog.target import Duty, Need, Purpose, Target, Tolerance
 
 EDITIONS = {"e11": tolerance.E11, "iso3310": tolerance.ISO_3310_1}
 HOUSE_SHARE = Fraction(5, 100)
@@ -24,6 +24,7 @@ def aim(
     need: Need | None = None,
     particle_is_sphere: bool | None = None,
     oversize_mm: float | None = None,
+    duty: Duty | None = None,
     house_share: Fraction = HOUSE_SHARE,
 ) -> Target:
     """Make the target of one *reading*.
@@ -50,6 +51,7 @@ def aim(
         certificate=reading.certificate,
         particle_is_sphere=particle_is_sphere,
         oversize_mm=oversize_mm,
+        duty=duty,
         origin=origin,
     )
 
@@ -80,9 +82,7 @@ def _tolerance(reading: Reading, stated: str | None, share: Fraction) -> tuple[T
     return Tolerance(float(allowed[0].mm), float(allowed[1].mm), allowed[0].source), limits
 
 
-def _drawn(
-    bounds: tuple[float | None, float | None] | None, warp: Fraction, weft: Fraction
-) -> Tolerance | None:
+def _drawn(bounds: tuple[float | None, float | None] | None, warp: Fraction, weft: Fraction) -> Tolerance | None:
     """A tolerance that the text gives: bounds on both sides of the asked aperture."""
     low, high = bounds or (None, None)
     if low is None or high is None or warp != weft or not low < warp < high:
@@ -91,9 +91,7 @@ def _drawn(
     return Tolerance(least, least, "stated in the callout")
 
 
-def _allowance(
-    aperture: Fraction, stated: str | None, standard: str | None, share: Fraction
-) -> tolerance.Allowance:
+def _allowance(aperture: Fraction, stated: str | None, standard: str | None, share: Fraction) -> tolerance.Allowance:
     edition = EDITIONS.get(stated or "") or (_edition(standard) if stated is None else None)
     if edition and Fraction(20, 1000) <= aperture <= 125:
         return tolerance.by_edition(aperture, edition)
@@ -168,9 +166,7 @@ def parse_need(text: str) -> Need:
         raise InputError(f"The need {text!r} asks for nothing: state a number and a size above 0.")
     if found["b"] is None:
         if not found["dia"] and "disc" not in text.lower():
-            raise InputError(
-                f"The need {text!r} has one size only: write 'discs' before it, or width x length."
-            )
+            raise InputError(f"The need {text!r} has one size only: write 'discs' before it, or width x length.")
         return Need(pieces, diameter_mm=a, written=text)
     b = float(found["b"].replace(",", ".")) * UNITS[unit_b.lower()]
     return Need(pieces, a, b, None, text)

@@ -14,7 +14,7 @@ from catalog.search.judging import Assessed, assess, describe, rank
 from catalog.search.pool import gather
 from catalog.search.reader import Reader
 from catalog.search.rules import HOUSE_RULES, HouseRules
-from catalog.target import Need, Purpose, Target
+from catalog.target import Duty, Need, Purpose, Target
 
 ACCEPTED_ALTERNATIVE = "alternative"
 
@@ -35,6 +35,7 @@ class Request:
     limit: int = 50
     particle_is_sphere: bool | None = None
     oversize_mm: float | None = None
+    duty: Duty | None = None
     reading: str | None = None
     """Label of the one reading to take, where the callout's question has been answered."""
 
@@ -107,6 +108,7 @@ def _aim(reading: Reading, request: Request, rules: HouseRules) -> Target:
         request.need,
         request.particle_is_sphere,
         request.oversize_mm,
+        request.duty,
         rules.aperture,
     )
 

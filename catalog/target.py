@@ -3,10 +3,14 @@
 from collections.abc import Mapping
 from dataclasses import dataclass, field
 from enum import StrEnum
+from typing import TYPE_CHECKING
 
 from catalog.callout.reading import Form, Limits, Reading, Side
 from catalog.cloth import Rating
 from catalog.construction import Weave
+
+if TYPE_CHECKING:
+    from catalog.physics.fluid_properties import Fluid
 
 
 class Purpose(StrEnum):
@@ -41,6 +45,20 @@ class Tolerance:
 
 
 @dataclass(frozen=True, slots=True)
+class Duty:
+    """A fluid at a face velocity."""
+
+    fluid: "Fluid"
+    velocity_m_s: float
+    assumed: bool = False
+
+    @property
+    def words(self) -> str:
+        """'air at 20 °C, 1 m/s (assumed)'."""
+        return f"{self.fluid.name}, {self.velocity_m_s:g} m/s" + (" (assumed)" if self.assumed else "")
+
+
+@dataclass(frozen=True, slots=True)
 class Target:
     """One reading with purpose, tolerance and need. Nothing in it is a quiet guess: see *origin*."""
 
@@ -59,6 +77,8 @@ class Target:
     """None: no particle shape was stated, so in rectangular cloth the worse direction counts."""
     oversize_mm: float | None = None
     """Largest single oversize of an opening that the user vouches for; guards are judged with it."""
+    duty: Duty | None = None
+    """Fluid and face velocity that were stated; None: usual ones are assumed where flow is the purpose."""
     origin: Mapping[str, str] = field(default_factory=dict)
     """Field → 'stated', 'derived' or 'assumed'."""
 

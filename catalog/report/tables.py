@@ -65,6 +65,11 @@ def alloy_table() -> Table:
             "jis": a.jis,
             "density_kg_m3": a.density_kg_m3,
             "basis": a.basis,
+            "family": a.family,
+            "tensile_least_mpa": a.tensile_mpa[0] if a.tensile_mpa else None,
+            "tensile_most_mpa": a.tensile_mpa[1] if a.tensile_mpa else None,
+            "tensile_basis": a.tensile_source or None,
+            "magnet": a.magnetic,
         }
         for a in alloys.alloys()
     ]

@@ -4,7 +4,7 @@ from collections.abc import Iterator
 
 from catalog.search.candidate import Finding
 from catalog.search.comparison import Comparison, Direction
-from catalog.search.purposes import ABOUT, Stand, harm
+from catalog.search.purposes import ABOUT, BEYOND_T_ONLY, Stand, harm
 from catalog.search.rules import HouseRules
 from catalog.search.wording import both, mm, pct, points, signed_pct, um
 from catalog.target import Purpose
@@ -59,9 +59,10 @@ def _apertures(c: Comparison, purposes: tuple[Purpose, ...]) -> Iterator[Finding
             f"({signed_pct(off / d.asked_aperture)}), {'within' if within else 'beyond'} T = {um(d.tolerance)}"
         )
         hurt = [p.value for p in purposes if harm(p, off)]
-        if hurt and within:
-            text += f"; harm side for {' and '.join(hurt)}: measure the roll"
-        elif hurt:
+        marked = [p.value for p in purposes if p.value in hurt and p not in BEYOND_T_ONLY]
+        if marked and within:
+            text += f"; harm side for {' and '.join(marked)}: measure the roll"
+        elif hurt and not within:
             text += f"; this hurts {' and '.join(hurt)}"
         source = c.target.tolerance.source if c.target.tolerance else ""
         yield Finding("aperture", within, text + ".", source)

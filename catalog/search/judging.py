@@ -98,7 +98,16 @@ def _details(c: Comparison, gates: list[Finding], purposes: tuple[Purpose, ...],
     if _is_about_filter_cloth(c):
         return decide_filter(c, gates, rules)[1]
     guards = guard_findings(c) if Purpose.GUARD in purposes else []
-    return guards + findings(c, purposes, rules)
+    return guards + findings(c, purposes, rules) + _in_service(c, purposes)
+
+
+def _in_service(c: Comparison, purposes: tuple[Purpose, ...]) -> list[Finding]:
+    """Pressure drop and breaking load, where that is what it is for; their physics are imported only then."""
+    if Purpose.FLOW not in purposes and Purpose.STRENGTH not in purposes:
+        return []
+    from catalog.search.duty import duty_findings
+
+    return list(duty_findings(c, c.target.duty))
 
 
 def stock_lines(lots: Sequence[Lot], target: Target) -> tuple[StockLine, ...]:

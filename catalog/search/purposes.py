@@ -10,6 +10,7 @@ from catalog.search.rules import HouseRules
 from catalog.target import Purpose
 
 HURTS_LARGER = (Purpose.RETAIN, Purpose.GUARD)
+BEYOND_T_ONLY = (Purpose.FLOW, Purpose.STRENGTH)
 HURTS_EITHER = (Purpose.SIZE, Purpose.FLOW, Purpose.STRENGTH)
 
 
@@ -79,8 +80,11 @@ def worst_reach(purpose: Purpose, c: Comparison, rules: HouseRules) -> Reach:
 
 
 def is_to_harm_side(purpose: Purpose, c: Comparison) -> bool:
-    """True where an aperture lies to the side that hurts by more than rounding."""
-    return any(
+    """True where an aperture lies to the side that hurts by more than rounding.
+
+    Flow and strength mind the aperture only beyond T, so within it nothing is to be marked for them.
+    """
+    return purpose not in BEYOND_T_ONLY and any(
         d.aperture_off is not None and harm(purpose, d.aperture_off) and abs(d.aperture_off) > d.aperture_rounding
         for d in c.directions
     )

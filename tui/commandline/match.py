@@ -5,7 +5,7 @@ import sys
 from typing import TYPE_CHECKING, Any
 
 from catalog.errors import InputError, NotFoundError
-from catalog.target import Need, Purpose
+from catalog.target import Duty, Need, Purpose
 from tui.commandline.options import Setting
 from tui.exit_codes import ExitCode, complain
 
@@ -36,6 +36,7 @@ def add_judgement(parser: argparse.ArgumentParser) -> None:
     parser.add_argument("--tolerance", metavar="PCT|e11|iso3310", help="what the aperture may be off by")
     parser.add_argument("--need", metavar="TEXT", help="how much: '4 pcs 1200x2400 mm', '12 discs 350 mm'")
     parser.add_argument("--particle", choices=("sphere", "any"), help="what meets rectangular openings")
+    parser.add_argument("--flow", metavar="TEXT", help="fluid and face velocity: 'air 20 C 2 m/s' (purpose flow)")
     parser.add_argument("--oversize", metavar="MM", type=float, help="largest single oversize you vouch for (guards)")
 
 
@@ -62,7 +63,17 @@ def request_of(text: str, arguments: argparse.Namespace) -> "Request":
         limit=getattr(arguments, "limit", 50),
         particle_is_sphere=True if arguments.particle == "sphere" else None,
         oversize_mm=arguments.oversize,
+        duty=duty_of(arguments.flow),
     )
+
+
+def duty_of(text: str | None) -> "Duty | None":
+    """The flow that an option states. Raises InputError."""
+    if text is None:
+        return None
+    from catalog.search.duty import parse_duty
+
+    return parse_duty(text)
 
 
 def purposes_of(text: str) -> tuple[Purpose, ...]:

@@ -1,17 +1,20 @@
 """`show`: one cloth's data sheet, drawn to scale; --explain lays the sums out."""
 
 import argparse
-from collections.abc import Iterator
+from collections.abc import Iterator, Sequence
+from textwrap import wrap
 from typing import TYPE_CHECKING, Any
 
-from catalog.errors import NotFoundError
+from catalog.errors import InputError, NotFoundError
 from tui.commandline.options import Setting
 from tui.commandline.reading_text import length_text
 from tui.exit_codes import ExitCode, one_line
 
 if TYPE_CHECKING:
     from catalog.cloth import Cloth
+    from catalog.report.properties import Property, Service
     from catalog.search.reader import Reader
+    from catalog.storage.store import Store
 
 
 def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest: Any) -> None:
@@ -19,6 +22,12 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     parser = commands.add_parser("show", help="one cloth's data sheet", **rest)
     parser.add_argument("cloth", metavar="CLOTH", help="the id that match and list show in brackets")
     parser.add_argument("--explain", action="store_true", help="lay out the sums")
+    parser.add_argument("--flow", metavar="TEXT", help="loss at a face velocity: 'air 20 C 2 m/s', 'water 60 C 5 cm/s'")
+    parser.add_argument("--particle", metavar="MM", type=float, help="chance that a sphere of this size passes")
+    parser.add_argument("--zinc", metavar="MM", type=float, help="coating per side")
+    parser.add_argument("--zinc-before", action="store_true", help="coated before weaving (default: after)")
+    parser.add_argument("--area", metavar="M2", type=float, help="net mass of so much")
+    parser.add_argument("--oversize", metavar="MM", type=float, help="safety distance with this largest oversize")
     parser.set_defaults(run=run)
 
 
@@ -26,25 +35,69 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Print the sheet of one cloth."""
     from catalog.report.documents import cloth_document, lot_document
     from catalog.report.explain import explain
+    from catalog.report.properties import properties
 
     with setting.open() as store:
-        cloth = find_cloth(store, arguments.cloth)
+        cloth = with_sphere(find_cloth(store, arguments.cloth), store)
         lots = store.lots([cloth.id]).get(cloth.id, ())
     steps = explain(cloth) if arguments.explain else ()
+    found = properties(cloth, service_of(arguments))
     if setting.json:
         document = {"schema": 1} | cloth_document(cloth) | {"stock": [lot_document(lot) for lot in lots]}
+        document["properties"] = [{"name": p.name, "words": p.words, "source": p.source} | p.values for p in found]
         if arguments.explain:
             names = ("quantity", "formula", "sum", "result", "source")
             document["explain"] = [{name: getattr(step, name) for name in names} for step in steps]
         setting.write_json(document)
         return ExitCode.DONE
     setting.write(sheet_lines(cloth, setting.units))
+    setting.write(property_lines(found))
     setting.write(_drawing(cloth, setting.ascii))
     for step in steps:
         source = f"   [{step.source}]" if step.source else ""
         setting.write(["", f"{step.quantity}: {step.formula}", f"  {step.sum}", f"  = {step.result}{source}"])
     setting.write(_lot_lines(lots))
     return ExitCode.DONE
+
+
+def with_sphere(cloth: "Cloth", store: "Store") -> "Cloth":
+    """Twilled Dutch cloth with its sphere, which is worked out now where it isn't kept yet."""
+    from dataclasses import replace
+
+    from catalog.construction import Weave
+
+    if cloth.construction.weave is not Weave.TWILLED_DUTCH or cloth.figures.sphere_um is not None:
+        return cloth
+    if not store.is_writable:
+        return cloth
+    from catalog.storage.spheres import keep_sphere
+
+    return replace(cloth, figures=replace(cloth.figures, sphere_um=keep_sphere(store, cloth)))
+
+
+def service_of(arguments: argparse.Namespace) -> "Service":
+    """What the options say of the service. Raises InputError for figures that can't be."""
+    from catalog.report.properties import Service
+    from tui.commandline.match import duty_of
+
+    for name in ("particle", "zinc", "area"):
+        value = getattr(arguments, name)
+        if value is not None and not 0 < value < 1e6:
+            raise InputError(f"--{name} {value:g} can't be: state more than 0.")
+    return Service(
+        duty=duty_of(arguments.flow),
+        particle_mm=arguments.particle,
+        coating_mm=arguments.zinc,
+        coated_after_weaving=not arguments.zinc_before,
+        area_m2=arguments.area,
+        oversize_mm=arguments.oversize,
+    )
+
+
+def property_lines(found: "Sequence[Property]") -> Iterator[str]:
+    """Figures in service, each on lines of at most 80 columns."""
+    for one in found:
+        yield from wrap(one_line(one.words), 80, initial_indent=f"{one.name:<16}", subsequent_indent=" " * 16)
 
 
 def find_cloth(store: "Reader", cloth_id: str) -> "Cloth":
@@ -90,7 +143,7 @@ def sheet_lines(cloth: "Cloth", units: str) -> Iterator[str]:
     finish = f", {one_line(made.finish)}" if made.finish else ""
     yield f"alloy       {one_line(made.alloy or 'not on record')}{finish}"
     yield f"source      {one_line(cloth.source)}"
-    yield f"in a line   {sentence(made, figures.mass_kg_m2)}"
+    yield from wrap(sentence(made, figures.mass_kg_m2), 80, initial_indent="in a line   ", subsequent_indent=" " * 12)
 
 
 def _filter_lines(cloth: "Cloth") -> Iterator[str]:

@@ -16,12 +16,15 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     new = actions.add_parser("new", help="make one with the reference catalogue", **rest)
     new.add_argument("--without-demo", action="store_true", help="leave out the invented stockist")
     actions.add_parser("drop-demo", help="take the invented stockist's cloths and lots out", **rest)
+    actions.add_parser("spheres", help="fill in the largest sphere of twilled Dutch cloth (a second each)", **rest)
     parser.set_defaults(run=run)
 
 
 def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """Do what the action says."""
-    return {"where": where, "new": new, "drop-demo": drop_demo}[arguments.action](arguments, setting)
+    return {"where": where, "new": new, "drop-demo": drop_demo, "spheres": spheres}[arguments.action](
+        arguments, setting
+    )
 
 
 def where(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
@@ -75,4 +78,22 @@ def drop_demo(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
         setting.write_json({"schema": 1, "dropped": {"cloths": gone}})
     else:
         setting.write([f"Taken out: {gone} invented cloths with their lots, offers and numbers."])
+    return ExitCode.DONE
+
+
+def spheres(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
+    """Fill in every sphere that is missing, saying each as it comes."""
+    from catalog.storage.spheres import fill_spheres
+
+    found = []
+    with setting.open(create=False) as store:
+        for cloth, um in fill_spheres(store):
+            found.append({"cloth": cloth.id, "sphere_um": um})
+            if not setting.json:
+                words = "no estimate" if um is None else f"{um:.1f} µm ± 2 %, a geometric estimate"
+                setting.write([f"{cloth.id:<16} {words}"])
+    if setting.json:
+        setting.write_json({"schema": 1, "filled": found})
+    else:
+        setting.write([f"{len(found)} worked out."])
     return ExitCode.DONE
