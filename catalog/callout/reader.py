@@ -1,26 +1,34 @@
 """From a text to an understanding. Reading never fails: what isn't understood is said with its place."""
 
-from collections.abc import Sequence
 from dataclasses import replace
 
-from catalog.callout.bounds import bounds
-from catalog.callout.deciding import Decided, decide
-from catalog.callout.draft import Draft
-from catalog.callout.grades import grade_wires
-from catalog.callout.items import Item
-from catalog.callout.labelled import labelled_figures, tolerances
-from catalog.callout.labels import bounded, labelled, letters, sided
-from catalog.callout.leftovers import bands, dates, leftovers, part_numbers, steel_codes
-from catalog.callout.measures import measured
-from catalog.callout.metals import metals
+from catalog.callout.alternatives import alternatives, with_alternative
+from catalog.callout.deciding.outcome import Decided, decide
+from catalog.callout.deciding.status import status_of
+from catalog.callout.joining.comparisons import bounded
+from catalog.callout.joining.directions import sided
+from catalog.callout.joining.labels import labelled
+from catalog.callout.joining.letters import letters
+from catalog.callout.joining.measures import measured
+from catalog.callout.joining.structure import structured
 from catalog.callout.reading import Likelihood, Problem, Reading, Side, Status, Understanding, Word
-from catalog.callout.repair import Repaired, repair
-from catalog.callout.shapes import unnamed_figures
-from catalog.callout.sizes import bare_sizes, sizes
-from catalog.callout.status import status_of
-from catalog.callout.structure import structured
-from catalog.callout.tokens import tokenize
-from catalog.callout.words import words
+from catalog.callout.rules.bands import bands
+from catalog.callout.rules.bare_sizes import bare_sizes
+from catalog.callout.rules.bounds import bounds
+from catalog.callout.rules.codes import part_numbers, steel_codes
+from catalog.callout.rules.dates import dates
+from catalog.callout.rules.draft import Draft
+from catalog.callout.rules.grades import grade_wires
+from catalog.callout.rules.labelled import labelled_figures
+from catalog.callout.rules.leftovers import leftovers
+from catalog.callout.rules.metals import metals
+from catalog.callout.rules.shapes import unnamed_figures
+from catalog.callout.rules.sizes import sizes
+from catalog.callout.rules.tolerances import tolerances
+from catalog.callout.rules.words import words
+from catalog.callout.text.items import Item
+from catalog.callout.text.repair import Repaired, repair
+from catalog.callout.text.tokens import tokenize
 
 LONGEST = 4000
 """Characters that are read; what comes after is no callout."""
@@ -33,10 +41,10 @@ def read(text: str) -> Understanding:
     repaired = repair(text[:LONGEST])
     tokens = tokenize(repaired.text)
     items = _pieces(tokens[:MOST_ITEMS])
-    parts = _alternatives(items)
+    parts = alternatives(items)
     understood = _understand(Draft(parts[0]), repaired, text)
     if len(parts) > 1:
-        understood = _with_alternative(understood, _understand(Draft(parts[1]), repaired, text))
+        understood = with_alternative(understood, _understand(Draft(parts[1]), repaired, text))
     if len(text) > LONGEST or len(tokens) > MOST_ITEMS:
         return _too_long(understood, min(LONGEST, repaired.place(items[-1].end) if items else 0))
     return understood
@@ -44,25 +52,6 @@ def read(text: str) -> Understanding:
 
 def _pieces(tokens: list[Item]) -> list[Item]:
     return bounded(sided(labelled(letters(structured(measured(tokens))))))
-
-
-def _alternatives(items: list[Item]) -> list[list[Item]]:
-    """'… / alt. 40 mesh .0095': a second cloth, where both sides hold the figures of one."""
-    for at, item in enumerate(items):
-        if item.has("equal"):
-            item.taken = "kind of goods"
-        elif item.has("alternative") and _has_cloth(items[:at]) and _has_cloth(items[at:]):
-            item.taken = "alternative"
-            return [items[: at + 1], items[at + 1 :]]
-    return [items]
-
-
-def _has_cloth(items: Sequence[Item]) -> bool:
-    numbers = [n for i in items for n in (i.members if i.kind == "chain" else [i] if i.is_number else [])]
-    named = any(
-        n.slot in ("mesh", "count", "aperture", "pitch") or n.unit in ("mesh sign", "/in", "/cm", "M") for n in numbers
-    )
-    return named or any(i.kind == "chain" for i in items)
 
 
 def _understand(draft: Draft, repaired: Repaired, text: str) -> Understanding:
@@ -118,45 +107,6 @@ def _words(draft: Draft, repaired: Repaired) -> tuple[Word, ...]:
                 if not found or start >= found[-1].end:
                     found.append(Word(start, end, part.taken))
     return tuple(found)
-
-
-def _with_alternative(first: Understanding, other: Understanding) -> Understanding:
-    """The first choice, and the alternative that the text accepts; what the alternative leaves out is as in the first."""
-    mains = [r for r in first.readings if r.likelihood is not Likelihood.RULED_OUT]
-    extra = [_inherit(mains[0], r) for r in other.surviving[:1]] if mains else []
-    mains = (
-        [replace(r, alloy=r.alloy or extra[0].alloy, weave=r.weave or extra[0].weave) for r in mains]
-        if extra
-        else mains
-    )
-    asks = (
-        Status.ASK in (first.status, other.status)
-        or not extra
-        or other.status in (Status.OUT_OF_SCOPE, Status.INCOMPLETE)
-    )
-    status = Status.ASK if asks else Status.NOTED if first.status is Status.CLEAR else first.status
-    problems = first.problems + tuple(p for p in other.problems if p not in first.problems)
-    if not extra and not problems:
-        problems = (Problem("E_NOT_UNDERSTOOD", "The alternative isn't understood.", None),)
-    words = tuple(sorted((*first.words, *other.words), key=lambda w: w.start))
-    readings = (*mains, *extra, *(r for r in first.readings if r.likelihood is Likelihood.RULED_OUT))
-    return replace(
-        first,
-        status=status,
-        readings=readings,
-        problems=problems,
-        words=words,
-        question=first.question or other.question,
-    )
-
-
-def _inherit(main: Reading, other: Reading) -> Reading:
-    filled = {
-        key: getattr(main, key)
-        for key in ("weave", "alloy", "finish", "crimp", "certificate", "form")
-        if getattr(other, key) is None
-    }
-    return replace(other, label=f"stated alternative: {other.label}", likelihood=Likelihood.USUAL, **filled)
 
 
 def _too_long(understood: Understanding, end: int) -> Understanding:

@@ -1,0 +1,97 @@
+"""Which number a word belongs to: the one behind '=', the unlabelled one just before, else the next."""
+
+from catalog.callout.joining.directions import give_side
+from catalog.callout.joining.measuring import peek
+from catalog.callout.joining.neighbours import EQUALS, first_of, last_of, next_figure
+from catalog.callout.joining.separators import is_separator
+from catalog.callout.text.items import Item
+
+FITS = {
+    "open_area": ("%", None),
+    "mass": ("kg/m2", "g/m2", "lb/ft2"),
+    "width": ("mm", "cm", "m", "in", "ft", "M", None),
+    "length": ("mm", "cm", "m", "in", "ft", "M", None),
+    "thickness": ("mm", "um", "in", "thou", None),
+    "wire": ("mm", "um", "in", "thou", "gauge", "hundredths", "aught", None),
+    "aperture": ("mm", "um", "in", "thou", "cm", "hundredths", None),
+    "pitch": ("mm", "um", "in", "thou", "cm", None),
+    "mesh": ("mm", "um", "in", "cm", "/in", "/cm", "mesh sign", "M", "designation", "hundredths", "/in2", "/cm2", None),
+    "count": ("/in", "/cm", "mesh sign", "M", "designation", "per length", "/in2", "/cm2", None),
+}
+
+
+def labelled(items: list[Item]) -> list[Item]:
+    """Give every label its number: the one behind '=', the unlabelled one just before it, else the next one."""
+    last: Item | None = None
+    for at, item in enumerate(items):
+        if item.is_number or item.kind == "chain":
+            last = item
+        elif item.kind == "sign" and (item.text in ":=" or (is_separator(item) and item.text != ")")):
+            last = None
+        elif item.kind == "term" and not item.taken:
+            if item.has("slot"):
+                _give(items, at, item, last)
+            if item.has("side"):
+                give_side(items, at, item, last)
+    return items
+
+
+def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
+    slot = label.senses["slot"]
+    after = peek(items, at + 1)
+    ahead = next_figure(items, at + 1)
+    behind_a_number = at > 0 and items[at - 1] is last and slot in ("mesh", "count")
+    points_on = after is not None and after.text in EQUALS and not behind_a_number
+    if last is not None and not points_on and _accepts(last_of(last), slot) and not _fits_ahead(last, ahead, slot):
+        _set(last, slot, backwards=True)
+        label.taken = slot
+    elif ahead is not None and _accepts(first_of(ahead), slot):
+        _set(ahead, slot, backwards=False)
+        label.taken = slot
+        first_of(ahead).senses["label before"] = ""
+
+
+def _fits_ahead(last: Item, ahead: Item | None, slot: str) -> bool:
+    """'0.5 mm wire 0.2 mm': between two lengths the wire is the thinner."""
+    if slot != "wire" or ahead is None or not ahead.is_number or ahead.slot or not ahead.is_length:
+        return False
+    return last_of(last).is_length and ahead.length().mm < last_of(last).length().mm
+
+
+def _accepts(number: Item, slot: str) -> bool:
+    if number.slot is not None or number.unit not in FITS[slot]:
+        return False
+    return not (slot == "open_area" and number.unit is None and (number.number is None or number.number.value < 5))
+
+
+def _set(item: Item, slot: str, backwards: bool) -> None:
+    """A label behind a product reaches back over like numbers, one before it reaches on: '3 x 1 mm opening'."""
+    if item.kind != "chain":
+        item.slot = slot
+        return
+    row = item.members[::-1] if backwards else item.members
+    row[0].slot = slot
+    for member, before in zip(row[1:], row, strict=False):
+        if member.slot is not None or not _alike(member, before, slot):
+            return
+        member.slot = slot
+
+
+def _alike(member: Item, before: Item, slot: str) -> bool:
+    whole = member.is_count_like or before.is_count_like
+    if member.unit != before.unit and not (slot == "aperture" and whole):
+        return False
+    if slot in ("mesh", "count"):
+        return member.is_count_like == before.is_count_like
+    if slot == "wire":
+        return member.unit == "gauge" or (member.is_count_like == before.is_count_like and _close(member, before))
+    return slot in ("aperture", "pitch") and (
+        member.is_count_like == before.is_count_like or member.is_length or before.is_length
+    )
+
+
+def _close(member: Item, before: Item) -> bool:
+    """True where two wires of one cloth may stand side by side: less than fourfold apart."""
+    if not member.number or not before.number or not before.number.value:
+        return False
+    return 1 / 4 < member.number.value / before.number.value < 4
