@@ -156,8 +156,8 @@ def _side(made: Construction, wires: Wires, measured: Measured, share: float, su
         fits[f"wire{suffix}"] = wire.fit(wire_mm, spread=wire_mm * share)
     if aperture is not None:
         spread = combined(pitch_mm * share, wire_mm * share)
-        open_mm = float(wires.aperture_mm)
-        fits[f"aperture{suffix}"] = Fit(None, -inf, inf) if made.is_filter else aperture.fit(open_mm, spread=spread)
+        open_fit = aperture.fit(pitch_mm - wire_mm, spread=spread)
+        fits[f"aperture{suffix}"] = Fit(None, -inf, inf) if made.is_filter else open_fit
     return fits
 
 

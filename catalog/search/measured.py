@@ -3,9 +3,9 @@
 A misfit is a difference in units of the ± that is shown; the odds come from the density of the error.
 """
 
-from dataclasses import dataclass
+from dataclasses import dataclass, field
 from fractions import Fraction
-from math import erfc, exp, inf, isinf, log, pi, sqrt
+from math import erfc, exp, hypot, inf, isinf, log, pi, sqrt
 
 K = 2
 """Coverage factor of every ± that isn't called a limit."""
@@ -29,7 +29,7 @@ def combined(*expanded: float) -> float:
 
     Source: JCGM 100:2008 (GUM), 5.1.2, with every sensitivity ±1 and one coverage factor.
     """
-    return sqrt(sum(u * u for u in expanded))
+    return hypot(*expanded)
 
 
 def log_density(off: float, limit: float, sigma: float) -> float:
@@ -64,6 +64,11 @@ class Fit:
     def is_out(self) -> bool:
         """True where this figure alone rules the cloth out."""
         return self.drop > DECISIVE
+
+    @property
+    def is_within(self) -> bool:
+        """True where it lies inside the ± shown, the edge included, and isn't ruled out."""
+        return not self.is_out and (self.misfit or 0.0) <= 1 + EDGE
 
 
 @dataclass(frozen=True, slots=True)
@@ -110,6 +115,13 @@ class Count:
     written: str = ""
     notes: tuple[str, ...] = ()
 
+    figures: "CountFigures" = field(init=False, repr=False, compare=False)
+    """The same as floats, worked out once: a catalogue is long."""
+
+    def __post_init__(self) -> None:
+        """Work out the floats."""
+        object.__setattr__(self, "figures", CountFigures.of(self))
+
     @property
     def pitch_mm(self) -> Fraction:
         """Length over spaces."""
@@ -118,26 +130,43 @@ class Count:
     @property
     def pitch_limit_mm(self) -> float:
         """± of the pitch that is shown, mm: the limit p·a/n, with the length's ± where it has one."""
-        p = float(self.pitch_mm)
-        return combined(p * float(self.limit / self.spaces), p * self.length_plus_minus_mm / float(self.length_mm))
+        return self.figures.pitch_limit_mm
 
     @property
     def pitch_expanded_mm(self) -> float:
         """Expanded uncertainty of the pitch, k = 2, mm: 1.155 times its limit, with the length's."""
-        p = float(self.pitch_mm)
-        limit = expanded_of_limit(p * float(self.limit / self.spaces))
-        return combined(limit, p * self.length_plus_minus_mm / float(self.length_mm))
+        at = self.figures
+        limit = expanded_of_limit(at.pitch_mm * at.limit / at.spaces)
+        return combined(limit, at.pitch_mm * at.length_share)
 
     def fit(self, pitch_mm: float, spread_mm: float = 0.0) -> Fit:
         """How a true pitch fits. The likelihood is taken in spaces, which are what was counted."""
-        unit = combined(self.pitch_limit_mm, spread_mm)
-        misfit = abs(pitch_mm - float(self.pitch_mm)) / unit
-        expected = float(self.length_mm) / pitch_mm
-        shares = (self.length_plus_minus_mm / float(self.length_mm), spread_mm / pitch_mm)
-        sigma = expected * combined(*shares) / K
-        found = log_density(expected - float(self.spaces), float(self.limit), sigma)
-        best = log_density(0.0, float(self.limit), sigma)
-        return Fit(misfit, found, inf if isinf(found) else max(0.0, best - found))
+        at = self.figures
+        misfit = abs(pitch_mm - at.pitch_mm) / combined(at.pitch_limit_mm, spread_mm)
+        expected = at.length_mm / pitch_mm
+        sigma = expected * combined(at.length_share, spread_mm / pitch_mm) / K
+        found = log_density(expected - at.spaces, at.limit, sigma)
+        return Fit(misfit, found, max(0.0, log_density(0.0, at.limit, sigma) - found))
+
+
+@dataclass(frozen=True, slots=True)
+class CountFigures:
+    """A count as floats: spaces, mm, shares."""
+
+    spaces: float
+    limit: float
+    length_mm: float
+    length_share: float
+    pitch_mm: float
+    pitch_limit_mm: float
+
+    @classmethod
+    def of(cls, count: Count) -> "CountFigures":
+        """Work them out."""
+        spaces, length = float(count.spaces), float(count.length_mm)
+        limit, share = float(count.limit), count.length_plus_minus_mm / length
+        pitch = length / spaces
+        return cls(spaces, limit, length, share, pitch, combined(pitch * limit / spaces, pitch * share))
 
 
 def odds_of(log_likelihoods: list[float]) -> list[float]:

@@ -5,7 +5,7 @@ from dataclasses import replace
 
 from catalog.reference import alloys
 from catalog.search.evidence import Evidence, stand
-from catalog.search.measured import Fit, Scalar
+from catalog.search.measured import Scalar
 from catalog.search.suspicion import Suspect
 
 JAMMED = 1 / 3**0.5
@@ -140,11 +140,7 @@ def _alive(suspects: Sequence[Suspect]) -> list[Suspect]:
 def _out_by_wire_alone(suspect: Suspect) -> bool:
     """Everything fits but the wire."""
     others = [fit for name, fit in suspect.stand.fits.items() if name != "wire"]
-    return suspect.stand.fits["wire"].is_out and all(_is_near(fit) for fit in others)
-
-
-def _is_near(fit: Fit) -> bool:
-    return not fit.is_out and (fit.misfit or 0.0) <= 1.0
+    return suspect.stand.fits["wire"].is_out and all(fit.is_within for fit in others)
 
 
 def _list(names: Sequence[str]) -> str:

@@ -137,7 +137,7 @@ def _confirming(leader: Suspect, suspects: Sequence[Suspect], evidence: Evidence
 def _is_close(suspect: Suspect) -> bool:
     fits = dict(suspect.stand.fits)
     pitch = fits.pop("pitch")
-    return 1 < (pitch.misfit or 0) <= CLOSE_MISFIT and all((fit.misfit or 0) <= 1 for fit in fits.values())
+    return 1 < (pitch.misfit or 0) <= CLOSE_MISFIT and all(fit.is_within for fit in fits.values())
 
 
 def _sure(leader: Suspect, rivals: Sequence[Suspect], counted: Count, misfits: Sequence[float]) -> Next:
