@@ -27,7 +27,9 @@ def _has_cloth(items: Sequence[Item]) -> bool:
 
 
 def with_alternative(first: Understanding, other: Understanding) -> Understanding:
-    """The first choice, and the alternative that the text accepts; what the alternative leaves out is as in the first."""
+    """The first choice, and the alternative that the text accepts;
+    what the alternative leaves out is as in the first.
+    """
     mains = [r for r in first.readings if r.likelihood is not Likelihood.RULED_OUT]
     extra = [_inherit(mains[0], r) for r in other.surviving[:1]] if mains else []
     mains = (

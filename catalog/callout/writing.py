@@ -54,7 +54,8 @@ def compact_metric(construction: Construction) -> str:
     warp, weft = construction.warp, construction.weft
     wires = "/".join(dict.fromkeys(_mm(w.wire_mm) for w in (warp, weft)))
     if construction.is_filter:
-        figures = f"{_count(warp.count_per_in)} × {_count(weft.count_per_in)} per inch, wire {_mm(warp.wire_mm)}/{_mm(weft.wire_mm)} mm"
+        counts = f"{_count(warp.count_per_in)} × {_count(weft.count_per_in)} per inch"
+        figures = f"{counts}, wire {_mm(warp.wire_mm)}/{_mm(weft.wire_mm)} mm"
     elif construction.is_square:
         figures = f"{_mm(warp.aperture_mm)}/{wires} mm"
     else:

@@ -113,7 +113,9 @@ def complete(claims: Sequence[Claim], name: str, is_filter: bool) -> tuple[Side,
 
 
 def _digits(length: Length) -> int:
-    """Significant digits of the spelling: of several that agree, the roundest was declared, the rest are conversions."""
+    """Significant digits of the spelling: of several that agree, the roundest was declared,
+    the rest are conversions.
+    """
     return len("".join(c for c in length.written if c.isdecimal()).strip("0")) or (1 if length.written else 9)
 
 
@@ -125,7 +127,9 @@ def _sum_clash(pitch: Length, wire: Length, aperture: Length) -> list[Clash]:
 
 
 def _of_three(pitch: Length, wire: Length, aperture: Length, by_count: bool, clash: bool) -> Side:
-    """All three are stated: the count, which is exact, goes before a rounded opening, a round opening before a rounded pitch."""
+    """All three are stated: the count, which is exact, goes before a rounded opening,
+    a round opening before a rounded pitch.
+    """
     exact_count = by_count and pitch.half_unit_mm == 0
     if clash or not (exact_count or _digits(pitch) < _digits(aperture)):
         return Side(replace(pitch, mm=aperture.mm + wire.mm), wire, aperture, by_count)

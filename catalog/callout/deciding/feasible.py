@@ -80,7 +80,8 @@ def _too_thin(side: Side, is_inferred: bool) -> Fault | None:
         open_area = 100 * float(1 - share) ** 2
         return Fault(
             "E_IMPLAUSIBLE",
-            f"Wire {mm(side.wire.mm)} on a {mm(side.pitch.mm)} pitch would leave {open_area:.1f} % open: no such cloth is woven.",
+            f"Wire {mm(side.wire.mm)} on a {mm(side.pitch.mm)} pitch would leave {open_area:.1f} % open: "
+            "no such cloth is woven.",
         )
     return None
 
@@ -103,7 +104,8 @@ def _jammed(warp: Side, weft: Side, weave: Weave | None) -> Fault | None:
     if not _is_jammed(warp.pitch.mm, weft.pitch.mm, both):
         return None
     worst = max((warp, weft), key=_closeness)
-    assert worst.pitch and worst.wire
+    assert worst.pitch
+    assert worst.wire
     share = worst.wire.mm / worst.pitch.mm
     twill = all(s.pitch and s.wire and s.wire.mm / s.pitch.mm <= TWILL_JAM_SHARE for s in (warp, weft))
     if weave is Weave.TWILLED and twill:
@@ -111,7 +113,8 @@ def _jammed(warp: Side, weft: Side, weave: Weave | None) -> Fault | None:
     limit = "2/2 twill 0.73" if not twill else "plain weave 0.577"
     return Fault(
         "E_JAMMED",
-        f"Wire {mm(worst.wire.mm)} on a {mm(worst.pitch.mm)} pitch is {float(share):.3f} of it: jammed beyond {limit}, it can't be woven{' plain' if twill else ''}.",
+        f"Wire {mm(worst.wire.mm)} on a {mm(worst.pitch.mm)} pitch is {float(share):.3f} of it: "
+        f"jammed beyond {limit}, it can't be woven{' plain' if twill else ''}.",
         twill,
     )
 
@@ -142,6 +145,7 @@ def _filter_fault(made: Combined, weave: Weave | None) -> Fault | None:
         if not CLOSE_PACKED[0] <= packing <= CLOSE_PACKED[1]:
             return Fault(
                 "E_IMPLAUSIBLE",
-                f"Wire {mm(close.wire.mm)} on a {mm(close.pitch.mm)} pitch packs {float(packing):.2g} to one: no filter cloth is woven so.",
+                f"Wire {mm(close.wire.mm)} on a {mm(close.pitch.mm)} pitch packs {float(packing):.2g} to one: "
+                "no filter cloth is woven so.",
             )
     return None

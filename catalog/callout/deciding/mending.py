@@ -40,9 +40,11 @@ def clash_message(clash: Clash) -> str:
     if clash.kind == "spelling":
         one, other = clash.lengths
         off = abs(other.mm / one.mm - 1) * 100 if one.mm else Fraction(0)
-        return f"Two figures for the {NAMES[clash.slot]} disagree: {mm(one.mm)} and {mm(other.mm)}, {float(off):.2g} % apart."
+        said = f"{mm(one.mm)} and {mm(other.mm)}, {float(off):.2g} % apart"
+        return f"Two figures for the {NAMES[clash.slot]} disagree: {said}."
     pitch, wire, aperture = clash.lengths
-    return f"{mm(aperture.mm)} opening + {mm(wire.mm)} wire = {mm(aperture.mm + wire.mm)} pitch, but {float(MM_PER_INCH / pitch.mm):.4g} per inch is {mm(pitch.mm)}."
+    said = f"{float(MM_PER_INCH / pitch.mm):.4g} per inch is {mm(pitch.mm)}"
+    return f"{mm(aperture.mm)} opening + {mm(wire.mm)} wire = {mm(aperture.mm + wire.mm)} pitch, but {said}."
 
 
 def mend_clash(draft: Draft, made: Combined) -> list[Mended]:

@@ -12,6 +12,7 @@ from catalog.callout.deciding.turning import Turned, senses_of_direction
 from catalog.callout.reading import Likelihood, Reading
 from catalog.callout.rules.draft import Draft
 from catalog.construction import Weave
+from catalog.units import Length
 
 QUIET_SENSES = ("opening x wire or rectangle",)
 """Senses that stay possible without a question, since custom is plain."""
@@ -56,6 +57,16 @@ def decide(draft: Draft) -> Decided:
     return _contradiction(draft, clashing) if clashing else _no_cloth(draft, tried)
 
 
+def _lengths(made: Combined) -> list[Length | None]:
+    """The figures that a fault is about, the wire first."""
+    return [made.warp.wire, made.weft.wire, made.warp.aperture, made.warp.pitch]
+
+
+def place_of(lengths: Sequence[Length | None]) -> int | None:
+    """Where the first figure stands that the text states."""
+    return next((x.span[0] for x in lengths if x is not None and x.span is not None and x.written), None)
+
+
 def _is_usual(tried: Tried) -> bool:
     return tried.turned.likelihood is Likelihood.USUAL
 
@@ -76,7 +87,7 @@ def _survivors(draft: Draft, alive: list[Tried], ruled_out: list[Tried], rank: i
     usual_lost = [t for t in ruled_out if _is_usual(t)]
     done.must_ask = len(asked) > 1 or rank > 1 or (sought and bool(usual_lost))
     if done.must_ask and len(asked) < 2 and ruled_out and ruled_out[0].fault:
-        draft.problem(ruled_out[0].fault.code, ruled_out[0].fault.message)
+        draft.problem_at(ruled_out[0].fault.code, ruled_out[0].fault.message, place_of(_lengths(ruled_out[0].made)))
     if done.must_ask:
         done.question = question(done.readings)
     return done
@@ -106,7 +117,7 @@ def _ruled_out(draft: Draft, tried: Tried) -> Reading:
 def _contradiction(draft: Draft, clashing: Sequence[Combined], others: Sequence[Tried] = ()) -> Decided:
     """Figures that disagree beyond rounding: every repair is a reading, and the question shows them."""
     first = clashing[0]
-    draft.problem("E_INCONSISTENT", clash_message(first.clashes[0]))
+    draft.problem_at("E_INCONSISTENT", clash_message(first.clashes[0]), place_of(first.clashes[0].lengths[1:]))
     repairs = [m for made in clashing[:4] for m in mend_clash(draft, made)]
     readings = _mended_readings(draft, repairs, Likelihood.USUAL)
     readings += [make_reading(draft, t.made, t.turned.label, Likelihood.POSSIBLE, t.turned.weave) for t in others]
@@ -127,14 +138,17 @@ def _mended_readings(draft: Draft, repairs: Sequence[Mended], likelihood: Likeli
 
 
 def _no_cloth(draft: Draft, tried: Sequence[Tried]) -> Decided:
-    """Nothing can be woven as written: say why, and offer a slip of the unit, a twill or a Dutch weave that explains it."""
+    """Nothing can be woven as written: say why, and offer a slip of the unit,
+    a twill or a Dutch weave that explains it.
+    """
     fault = tried[0].fault
     assert fault is not None
     repairs = [m for one in tried[:4] for m in mend_unit(draft, one.made)]
+    place = place_of(_lengths(tried[0].made))
     if repairs:
-        draft.problem("E_UNIT", f"{fault.message.rstrip('.')}; {repairs[0].label}?")
+        draft.problem_at("E_UNIT", f"{fault.message.rstrip('.')}; {repairs[0].label}?", place)
     else:
-        draft.problem(fault.code, fault.message)
+        draft.problem_at(fault.code, fault.message, place)
     readings = _mended_readings(draft, repairs, Likelihood.POSSIBLE)
     readings += _other_weaves(draft, tried)
     readings += [_ruled_out(draft, one) for one in tried[:4] if one.fault and not one.made.is_inferred]

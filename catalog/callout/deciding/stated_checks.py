@@ -12,7 +12,9 @@ COMMON_METALS = ("304", "CS", "CuZn30", "CuSn6", "Cu-ETP", "Al5056", "400", "TiG
 
 
 def is_whole(reading: Reading) -> bool:
-    """True where warp and weft are both known: pitch and wire, for square and rectangular cloth the opening by itself."""
+    """True where warp and weft are both known: pitch and wire,
+    for square and rectangular cloth the opening by itself.
+    """
     return all(side.pitch and side.wire for side in (reading.warp, reading.weft))
 
 
@@ -52,14 +54,18 @@ def check_mass(draft: Draft, reading: Reading) -> None:
     shown = ", ".join(f"{m:.2g} in {name}" for name, m in list(masses.items())[:1] if m)
     draft.problem(
         "E_INCONSISTENT",
-        f"A mass of {stated:.3g} kg/m² fits no {'cloth of the alloy' if draft.alloy else 'common metal'}: this construction weighs {shown}.",
+        f"A mass of {stated:.3g} kg/m² fits no {'cloth of the alloy' if draft.alloy else 'common metal'}: "
+        f"this construction weighs {shown}.",
         draft.mass,
     )
 
 
 def _mass(reading: Reading, density: float) -> float:
     warp, weft = reading.warp, reading.weft
-    assert warp.pitch and weft.pitch and warp.wire and weft.wire
+    assert warp.pitch
+    assert weft.pitch
+    assert warp.wire
+    assert weft.wire
     return mass_nominal_kg_m2(
         float(warp.pitch.mm), float(weft.pitch.mm), float(warp.wire.mm), float(weft.wire.mm), density
     )

@@ -122,4 +122,5 @@ def _rating_question(draft: Draft) -> str | None:
     rating = draft.rating
     if rating is None:
         return None
-    return f"By which method are {rating.um:g} µm {rating.kind if rating.kind != 'unstated' else 'rated'}, and for which counts and wires?"
+    kind = rating.kind if rating.kind != "unstated" else "rated"
+    return f"By which method are {rating.um:g} µm {kind}, and for which counts and wires?"

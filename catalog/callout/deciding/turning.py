@@ -86,7 +86,9 @@ def _gauge_behind(draft: Draft, made: Combined) -> list[Turned]:
 
 
 def _dutch(draft: Draft, made: Combined, plain: Turned) -> list[Turned]:
-    """Dutch cloth has more weft than warp, reverse Dutch more warp; written the other way, the order or the word is wrong."""
+    """Dutch cloth has more weft than warp, reverse Dutch more warp; written the other way,
+    the order or the word is wrong.
+    """
     warp, weft = made.warp.pitch, made.weft.pitch
     if warp is None or weft is None or warp.mm == weft.mm:
         return [replace(plain, weave=draft.weave)]

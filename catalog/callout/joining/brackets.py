@@ -5,7 +5,9 @@ from catalog.callout.text.items import Item
 
 
 def brackets(items: list[Item]) -> list[Item]:
-    """Figures in brackets behind a figure say it again: '.012 in (0.30 mm)', '0.4233 mm (60 per inch, 23.62 per cm)'."""
+    """Figures in brackets behind a figure say it again: '.012 in (0.30 mm)', '0.4233 mm (60 per inch,
+    23.62 per cm)'.
+    """
     out: list[Item] = []
     at = 0
     while at < len(items):

@@ -9,7 +9,9 @@ SIGN_BOUNDS = {"≤": "most", "≥": "least", "<": "under", ">": "over"}
 
 
 def bounded(items: list[Item]) -> list[Item]:
-    """Give every comparison its number: '≥ 40 %' the next, '0.8 mm max' the one before, 'or finer' always the one before."""
+    """Give every comparison its number: '≥ 40 %' the next, '0.8 mm max' the one before,
+    'or finer' always the one before.
+    """
     for at, item in enumerate(items):
         bound = SIGN_BOUNDS.get(item.text) if item.kind == "sign" else item.senses.get("compare")
         if bound is None or item.taken:

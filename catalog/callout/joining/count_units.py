@@ -19,7 +19,8 @@ def counted_over_a_length(items: list[Item]) -> list[Item]:
         count, word, over, unit = parts
         if word.text.lower() not in ("in", "per", "auf", "je", "pro", "par") or unit.senses["unit"] not in ("mm", "cm"):
             return None
-        assert count.number and over.number
+        assert count.number
+        assert over.number
         scale = 10 if unit.senses["unit"] == "cm" else 1
         span = over.number.value * scale
         if not count.number.is_integer or not span or not count.number.value:
@@ -33,7 +34,9 @@ def counted_over_a_length(items: list[Item]) -> list[Item]:
 
 
 def counts_with_units(items: list[Item]) -> list[Item]:
-    """'24 Maschen/cm', '60 mesh per inch', '3600 meshes per square inch': the unit behind the word belongs to the count."""
+    """'24 Maschen/cm', '60 mesh per inch', '3600 meshes per square inch':
+    the unit behind the word belongs to the count.
+    """
 
     def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
         number, label, unit = items[at], peek(items, at + 1), peek(items, at + 2)

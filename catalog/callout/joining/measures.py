@@ -23,7 +23,9 @@ def measured(items: list[Item]) -> list[Item]:
 
 
 def _numbers_with_units(items: list[Item]) -> list[Item]:
-    """A unit stands behind its number: '0.5 mm', '36\"', '16 ga', '24/cm', '60#', '6 pcs'. 'in' before a size is a word."""
+    """A unit stands behind its number: '0.5 mm', '36\"', '16 ga', '24/cm', '60#', '6 pcs'.
+    'in' before a size is a word.
+    """
 
     def rule(items: list[Item], at: int) -> tuple[Item, int] | None:
         number, behind = items[at], peek(items, at + 1)

@@ -6,7 +6,9 @@ from catalog.callout.rules.draft import Draft
 
 
 def bands(draft: Draft) -> None:
-    """'-40+60 mesh', 'passing 40 mesh, retained on 60': a band of particles, by what passes one sieve and stays on another."""
+    """'-40+60 mesh', 'passing 40 mesh, retained on 60': a band of particles,
+    by what passes one sieve and stays on another.
+    """
     signed = [n for n in draft.numbers() if n.bound in ("passing", "held")]
     for word in draft.terms("band"):
         number = peek(draft.items, word.at + 1)

@@ -67,7 +67,8 @@ def opening_or_pitch(draft: Draft, openings: list[Item], wires: list[Item] | Non
 
 
 def _two_lengths(draft: Draft, chain: Item, free: list[Item]) -> None:
-    """'0,25 x 0,16 mm', '0.25/0.16': opening and wire, as fine metric cloth is named; coarse or in inches also pitch and wire.
+    """'0,25 x 0,16 mm', '0.25/0.16': opening and wire, as fine metric cloth is named;
+    coarse or in inches also pitch and wire.
 
     A rectangular opening stays possible; the wire first is thought of where opening and wire would make no cloth.
     """

@@ -11,7 +11,9 @@ from catalog.units import MM_PER_UNIT
 
 
 def bare_sizes(draft: Draft) -> None:
-    """Once the cloth is known, what is left of a size: '36X100' is inches by feet, '1.0x30' metres, '1220 x 30' both."""
+    """Once the cloth is known, what is left of a size: '36X100' is inches by feet, '1.0x30' metres,
+    '1220 x 30' both.
+    """
     for chain in draft.kinds("chain"):
         members = [m for m in chain.members if not m.taken]
         if len(members) != 2 or any(m.slot or (m.unit and not m.is_length) for m in members):
@@ -33,7 +35,8 @@ def bare_sizes(draft: Draft) -> None:
 
 
 def _bare_pair(draft: Draft, one: Item, other: Item) -> tuple[Fraction, Fraction] | None:
-    assert one.number and other.number
+    assert one.number
+    assert other.number
     a, b = one.number.value, other.number.value
     if one.unit or other.unit:
         sides = size_mm(one, other.unit), size_mm(other, one.unit)

@@ -9,15 +9,15 @@ from catalog.units import MM_PER_INCH, MM_PER_UNIT
 
 Range = tuple[float | None, float | None]
 LEAST, MOST = "least", "most"
+THICKER = {"heavier": LEAST, "lighter": MOST, "not heavier": MOST, "not lighter": LEAST}
+LARGER = {"over": LEAST, "under": MOST, "not larger": MOST, "not smaller": LEAST}
+NARROWER = {"finer": MOST, "coarser": LEAST, "not finer": LEAST, "not coarser": MOST}
 SIDE_OF: dict[str, dict[str, str]] = {
-    "count": {"finer": LEAST, "coarser": MOST, "not finer": MOST, "not coarser": LEAST, "over": LEAST, "under": MOST, "not larger": MOST, "not smaller": LEAST},
-    "wire": {
-        "heavier": LEAST, "lighter": MOST, "not heavier": MOST, "not lighter": LEAST, "over": LEAST, "under": MOST, "finer": MOST, "coarser": LEAST,
-        "not finer": LEAST, "not coarser": MOST, "not larger": MOST, "not smaller": LEAST,
-    },
-    "aperture": {"over": LEAST, "under": MOST, "not larger": MOST, "not smaller": LEAST, "finer": MOST, "coarser": LEAST, "not finer": LEAST, "not coarser": MOST},
-    "": {"over": LEAST, "under": MOST, "not larger": MOST, "not smaller": LEAST, "heavier": LEAST, "lighter": MOST, "not heavier": MOST, "not lighter": LEAST},
-}  # fmt: skip
+    "count": {**LARGER, "finer": LEAST, "coarser": MOST, "not finer": MOST, "not coarser": LEAST},
+    "wire": {**THICKER, **LARGER, **NARROWER},
+    "aperture": {**LARGER, **NARROWER},
+    "": {**LARGER, **THICKER},
+}
 """Figure → comparison → the side that it bounds."""
 KEYS = {
     "count": "count_per_in",

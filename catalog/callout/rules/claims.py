@@ -10,8 +10,9 @@ from catalog.units import MM_PER_INCH, Length
 
 CM = Fraction(10)
 COUNT_UNITS: dict[str | None, Fraction] = {
-    None: MM_PER_INCH, "/in": MM_PER_INCH, "mesh sign": MM_PER_INCH, "M": MM_PER_INCH, "designation": MM_PER_INCH, "/cm": CM,
-}  # fmt: skip
+    **dict.fromkeys((None, "/in", "mesh sign", "M", "designation"), MM_PER_INCH),
+    "/cm": CM,
+}
 SQUARE_UNITS = {"/in2": MM_PER_INCH, "/cm2": CM}
 ROOT_SCALE = 10**12
 

@@ -27,7 +27,8 @@ def steel_codes(draft: Draft) -> None:
         draft.claims += [length_claim("aperture", sizes[:1]), length_claim("wire", sizes[1:])]
         draft.standards.append("GOST 3826 style")
         draft.note(
-            f"{item.text}: opening {_pointed(found['aperture'])} mm, wire {_pointed(found['wire'])} mm; a leading zero is the zero before the point"
+            f"{item.text}: opening {_pointed(found['aperture'])} mm, wire {_pointed(found['wire'])} mm; "
+            "a leading zero is the zero before the point"
         )
 
 
@@ -36,7 +37,9 @@ def _pointed(digits: str) -> str:
 
 
 def part_numbers(draft: Draft) -> None:
-    """A number behind 'P/N' or 'art. no.' names an article. A scheme that nobody explains is a question, never decoded."""
+    """A number behind 'P/N' or 'art. no.' names an article. A scheme that nobody explains is a question,
+    never decoded.
+    """
     for item in draft.kinds("code"):
         before = draft.items[max(0, item.at - 3) : item.at]
         item.taken = "code"

@@ -63,7 +63,9 @@ def _has_two_counts(draft: Draft) -> bool:
 
 
 def beside_a_count(draft: Draft, number: Item) -> None:
-    """A length beside a count is its wire; micrometres are rather its opening, and so is the opening of the sieve of that number."""
+    """A length beside a count is its wire; micrometres are rather its opening,
+    and so is the opening of the sieve of that number.
+    """
     if knows_wire(draft):
         if not states_opening(draft) and (number.is_length or number.number):
             take([number], "aperture")

@@ -28,7 +28,9 @@ MONTHS = {
 
 
 def dates(draft: Draft) -> None:
-    """'16-Mar' and '04-Jan' are 3/16 and 1/4 that a spreadsheet took for dates; beside a whole cloth a date is a date."""
+    """'16-Mar' and '04-Jan' are 3/16 and 1/4 that a spreadsheet took for dates;
+    beside a whole cloth a date is a date.
+    """
     for item in draft.kinds("date"):
         before = peek(draft.items, item.at - 1)
         item.taken = "date"

@@ -99,8 +99,12 @@ class Draft:
 
     def problem(self, code: str, message: str, item: Item | None = None) -> None:
         """Say what is wrong and where (the place is within the repaired text, until the end)."""
+        self.problem_at(code, message, None if item is None else item.start)
+
+    def problem_at(self, code: str, message: str, place: int | None) -> None:
+        """Say what is wrong at a place in the repaired text."""
         if all(p.message != message for p in self.problems):
-            self.problems.append(Problem(code, message, None if item is None else item.start))
+            self.problems.append(Problem(code, message, place))
 
     def terms(self, role: str) -> list[Item]:
         """The words with a role that no rule has claimed."""

@@ -1,4 +1,6 @@
-"""Grades imply a wire: market grade and bolting cloth by custom, each count its own. TBC is bolting cloth or 'to be confirmed'."""
+"""Grades imply a wire: market grade and bolting cloth by custom, each count its own.
+TBC is bolting cloth or 'to be confirmed'.
+"""
 
 from fractions import Fraction
 

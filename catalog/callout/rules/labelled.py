@@ -77,7 +77,9 @@ def _pitches(draft: Draft) -> None:
 
 
 def _apertures(draft: Draft) -> None:
-    """'0.25 mm aperture', 'maille 0,10', '3/8 sq opg', 'slot 1 x 8 mm': clear openings; of a sieve, with the standard's wire."""
+    """'0.25 mm aperture', 'maille 0,10', '3/8 sq opg', 'slot 1 x 8 mm': clear openings; of a sieve,
+    with the standard's wire.
+    """
     for row in groups(draft, "aperture"):
         take(row, "aperture")
         if draft.is_sieve and row[0].is_length and sieve_opening(draft, row[0]):

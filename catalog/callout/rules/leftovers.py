@@ -6,9 +6,10 @@ from catalog.callout.text.items import Item
 from catalog.units import Length
 
 MOST_PROBLEMS = 5
+IGNORED = ("harmless", "number sign", "range", "between", "by", "delivery", "part number", "equal", "negation", "band")
 ROLES = {
-    "slot": "label", "side": "direction", "unit": "unit", "compare": "limit", "harmless": "ignored", "number sign": "ignored", "range": "ignored", "between": "ignored",
-    "by": "ignored", "tolerance word": "limit", "delivery": "ignored", "part number": "ignored", "purpose": "limit", "equal": "ignored", "negation": "ignored", "form": "form", "band": "ignored",
+    "slot": "label", "side": "direction", "unit": "unit", "compare": "limit", "tolerance word": "limit",
+    "purpose": "limit", "form": "form", **dict.fromkeys(IGNORED, "ignored"),
 }  # fmt: skip
 
 

@@ -1,4 +1,6 @@
-"""Rules for numbers that nothing names: their shape says what they can be, and every sense is kept until one is left."""
+"""Rules for numbers that nothing names: their shape says what they can be,
+and every sense is kept until one is left.
+"""
 
 from catalog.callout.rules.bare_lengths import beside_openings, length_alone, lengths_only
 from catalog.callout.rules.counted_shapes import beside_a_count, beside_counts, is_of_a_new_side

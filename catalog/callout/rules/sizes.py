@@ -54,7 +54,9 @@ def _areas(draft: Draft, size: Size) -> None:
 
 
 def _beside_goods(draft: Draft, size: Size) -> None:
-    """'panel 1200 x 2400', '24 x 36 in panels', 'disc 350 mm', '12 discs Ø 350': sizes beside the word for the goods."""
+    """'panel 1200 x 2400', '24 x 36 in panels', 'disc 350 mm', '12 discs Ø 350':
+    sizes beside the word for the goods.
+    """
     for word in (*draft.terms("form"), *(i for i in draft.items if i.is_number and i.unit == "pieces")):
         kind = word.senses.get("form") or word.system
         at = word.at
@@ -105,7 +107,8 @@ def _take_panel(draft: Draft, size: Size, item: Item, kind: str | None) -> bool:
 
 
 def _panel_unit(draft: Draft, one: Item, other: Item, kind: str | None) -> str | None:
-    assert one.number and other.number
+    assert one.number
+    assert other.number
     if one.is_count_like and other.is_count_like and min(one.number.value, other.number.value) >= 150:
         draft.note(f"{one.text} x {other.text}: no unit; taken as mm")
         return "mm"

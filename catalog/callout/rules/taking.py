@@ -26,7 +26,9 @@ def with_twin(members: list[Item], number: Item) -> list[Item]:
 
 
 def said_again(draft: Draft, slot: str, row: list[Item]) -> None:
-    """What stands in brackets behind figures: the same in another unit; behind a count or a sieve's number, its opening."""
+    """What stands in brackets behind figures: the same in another unit; behind a count or a sieve's number,
+    its opening.
+    """
     pairs = list(zip(*(n.restated for n in row), strict=False)) if len(row) > 1 else [(a,) for a in row[0].restated]
     if len(row) > 1 and not pairs:
         pairs = [(again,) for again in row[-1].restated]

@@ -56,7 +56,9 @@ def unit_options(draft: Draft, slot: str, row: list[Item]) -> list[Option]:
 
 
 def preferred_unit(draft: Draft, row: list[Item]) -> str:
-    """The unit of the figures beside it; else inches for a dropped zero, a fraction or beside a count; else millimetres."""
+    """The unit of the figures beside it; else inches for a dropped zero, a fraction or beside a count;
+    else millimetres.
+    """
     cloth = [
         n
         for n in draft.all_numbers()

@@ -62,7 +62,9 @@ def _two_wholes(draft: Draft, free: list[Item], claim: Claim) -> None:
 
 
 def _count_and_wire(draft: Draft, wholes: list[Item], rest: list[Item], claim: Claim) -> list[Option]:
-    """'20 x 0.4', '10 x 10 x 1 mm': count and wire, or opening (pitch) and wire in millimetres where that makes a cloth too."""
+    """'20 x 0.4', '10 x 10 x 1 mm': count and wire,
+    or opening (pitch) and wire in millimetres where that makes a cloth too.
+    """
     written = " x ".join(n.text for n in wholes)
     wire = rest[-1]
     if wire.is_length and wire.unit in ("in", "thou"):

@@ -38,7 +38,9 @@ def words(draft: Draft, text: str) -> None:
 
 
 def _certificates(draft: Draft) -> None:
-    """'3.1 cert', 'EN 10204-3.1', 'Zeugnis 3.1': 2.1, 2.2, 3.1 and 3.2 beside such a word are certificates, no lengths."""
+    """'3.1 cert', 'EN 10204-3.1', 'Zeugnis 3.1': 2.1, 2.2, 3.1 and 3.2 beside such a word are certificates,
+    no lengths.
+    """
     for item in draft.kinds("certificate"):
         kind = re.search(r"[23][.,][12](?=[ABC]?$)", item.text)
         draft.certificate = kind.group().replace(",", ".") if kind else None

@@ -18,9 +18,10 @@ TABLES: tuple[tuple[str, dict[str, str]], ...] = (
 LISTS: tuple[tuple[str, str], ...] = (
     ("filter", cloth.FILTERS), ("product", cloth.PRODUCTS), ("hardware", cloth.HARDWARE_CLOTH), ("sieve", cloth.SIEVES),
     ("number sign", cloth.NUMBER_SIGNS), ("not metal", trade.NOT_METAL), ("reference", trade.REFERENCES),
-    ("alternative", trade.ALTERNATIVES), ("equal", trade.EQUALS), ("certificate word", trade.CERTIFICATES), ("band", trade.BAND),
-    ("range", trade.RANGES), ("between", trade.BETWEEN), ("by", trade.BY), ("tolerance word", trade.TOLERANCE),
-    ("negation", trade.NEGATIONS), ("harmless", trade.HARMLESS), ("part number", trade.PART_NUMBERS), ("delivery", trade.DELIVERIES),
+    ("alternative", trade.ALTERNATIVES), ("equal", trade.EQUALS), ("certificate word", trade.CERTIFICATES),
+    ("band", trade.BAND), ("range", trade.RANGES), ("between", trade.BETWEEN), ("by", trade.BY),
+    ("tolerance word", trade.TOLERANCE), ("negation", trade.NEGATIONS), ("harmless", trade.HARMLESS),
+    ("part number", trade.PART_NUMBERS), ("delivery", trade.DELIVERIES),
 )  # fmt: skip
 
 

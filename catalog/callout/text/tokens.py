@@ -10,7 +10,9 @@ from catalog.callout.text.ocr import likely_word
 from catalog.units import Number, parse_number
 
 POINTED = re.compile(r"(?<![\w.])0?\.\d")
-"""A decimal point: a comma between digits then parts the items of a list, unless decimals with a comma are there too."""
+"""A decimal point: a comma between digits then parts the items of a list,
+unless decimals with a comma are there too.
+"""
 COMMAED = re.compile(r"(?<![\d.,])0,\d")
 GROUP = re.compile(r"\d{1,3}(?:,\d{3})+(?:\.\d+)?")
 SIZE_UNIT = re.compile(r"\s?(?:mm|lbs?|pcs|m|ft)\b", re.IGNORECASE)
