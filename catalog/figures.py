@@ -4,6 +4,7 @@ from catalog.cloth import Figures
 from catalog.construction import Construction, Weave
 from catalog.physics import filter_cloth, geometry, mass
 
+Pair = tuple[float, float]
 DERIVATION_VERSION = 1
 """Raised when a formula changes; a store with another version is recomputed."""
 
@@ -14,12 +15,12 @@ def figures(construction: Construction, density_kg_m3: float | None) -> Figures:
     Mass is None where *density_kg_m3* is. Filter cloth has no aperture and no open area; its mass is the
     geometric estimate. The twilled Dutch sphere is filled in later: it takes seconds.
     """
-    sides = (construction.warp, construction.weft)
-    pitches = [float(side.pitch_mm) for side in sides]
-    wires = [float(side.wire_mm) for side in sides]
+    warp, weft = construction.warp, construction.weft
+    pitches = float(warp.pitch_mm), float(weft.pitch_mm)
+    wires = float(warp.wire_mm), float(weft.wire_mm)
     if construction.is_filter:
         return _filter_figures(construction.weave, pitches, wires, density_kg_m3)
-    apertures = [float(side.aperture_mm) for side in sides]
+    apertures = float(warp.aperture_mm), float(weft.aperture_mm)
     nominal = geometric = None
     if density_kg_m3 is not None:
         twilled = construction.weave is Weave.TWILLED
@@ -35,7 +36,7 @@ def figures(construction: Construction, density_kg_m3: float | None) -> Figures:
     )
 
 
-def _filter_figures(weave: Weave, pitches: list[float], wires: list[float], density_kg_m3: float | None) -> Figures:
+def _filter_figures(weave: Weave, pitches: Pair, wires: Pair, density_kg_m3: float | None) -> Figures:
     thickness = filter_cloth.thickness_mm(weave.value, *wires)
     mass_kg_m2 = porosity = sphere_um = None
     if density_kg_m3 is not None:

@@ -94,7 +94,7 @@ def _flow(cloth: Cloth, service: Service) -> Iterator[Property]:
         yield Property("flow", "no model: the pore of this weave has no geometric estimate", "")
         return
     notes = " ".join(loss.notes)
-    values = {"K": loss.K, "pressure_drop_pa": loss.pressure_drop_pa, "in_range": loss.in_range}
+    values: dict[str, Any] = {"K": loss.K, "pressure_drop_pa": loss.pressure_drop_pa, "in_range": loss.in_range}
     values |= {"method": loss.method, "uncertainty_pct": loss.uncertainty_pct}
     yield Property("flow", f"{service.duty.words}: {loss_words(loss)}. {notes}".strip(), loss.method, values)
 
@@ -126,8 +126,8 @@ def _coating(cloth: Cloth, service: Service) -> Iterator[Property]:
     made, coat = cloth.construction, service.coating_mm
     if coat is None or made.is_filter:
         return
-    pitches = [float(s.pitch_mm) for s in (made.warp, made.weft)]
-    wires = [float(s.wire_mm) for s in (made.warp, made.weft)]
+    pitches = float(made.warp.pitch_mm), float(made.weft.pitch_mm)
+    wires = float(made.warp.wire_mm), float(made.weft.wire_mm)
     density = alloys.density_kg_m3(made.alloy) if made.alloy else None
     found = coated(*pitches, *wires, coat, service.coated_after_weaving, wire_density_kg_m3=density or 7850.0)
     words = (
@@ -183,9 +183,10 @@ def _twilled_sphere(cloth: Cloth) -> Iterator[Property]:
         words = f"{cloth.figures.sphere_um:.1f} µm ± 2 %: a geometric estimate, no rating"
         yield Property("largest sphere", words, "numeric, widest path", {"sphere_um": cloth.figures.sphere_um})
         return
-    sides = [float(v) for v in (made.warp.pitch_mm, made.weft.pitch_mm, made.warp.wire_mm, made.weft.wire_mm)]
+    pitches = float(made.warp.pitch_mm), float(made.weft.pitch_mm)
+    wires = float(made.warp.wire_mm), float(made.weft.wire_mm)
     try:
-        found = filter_cloth.sphere_twilled_dutch_um(*sides)
+        found = filter_cloth.sphere_twilled_dutch_um(*pitches, *wires)
     except OutOfDomainError as error:
         yield Property("largest sphere", f"no model: {error.message}", "")
         return

@@ -61,8 +61,8 @@ def usual_duty() -> Duty:
 
 def bed_of(made: Construction, pore_mm: float | None = None) -> Bed | None:
     """The cloth as a bed of wires. Filter cloth needs its pore; None where it isn't known or doesn't fit."""
-    sides = (made.warp, made.weft)
-    pitches, wires = [float(s.pitch_mm) for s in sides], [float(s.wire_mm) for s in sides]
+    pitches = float(made.warp.pitch_mm), float(made.weft.pitch_mm)
+    wires = float(made.warp.wire_mm), float(made.weft.wire_mm)
     try:
         if not made.is_filter:
             return square_bed(*pitches, *wires)

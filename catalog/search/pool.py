@@ -1,7 +1,9 @@
 """Which cloths are judged: the nearest, and every one in the box in which a near cloth can lie."""
 
 from collections.abc import Mapping, Sequence
+from typing import NamedTuple
 
+from catalog.callout.reading import Side
 from catalog.cloth import Cloth
 from catalog.search.reader import Filters, Point, Range, Reader
 from catalog.search.rules import HouseRules
@@ -19,18 +21,33 @@ RANGE_OF_LIMIT = {
 
 def point_of(target: Target) -> Point:
     """Where *target* lies in the design's distance."""
-    sides = {"warp": target.warp, "weft": target.weft}
-    figures: dict[str, float | None] = {}
     is_filter = target.reading.is_filter or (target.rating is not None and target.warp.aperture is None)
-    for name, side in sides.items():
-        figures[f"{name}_wire_mm"] = float(side.wire.mm) if side.wire else None
-        by_aperture = side.aperture is not None and not is_filter
-        figures[f"{name}_aperture_mm"] = float(side.aperture.mm) if by_aperture and side.aperture else None
-        figures[f"{name}_pitch_mm"] = float(side.pitch.mm) if side.pitch and not by_aperture else None
-    if is_filter:
-        rating = target.rating.um if target.rating else None
-        return Point(is_filter=True, rating_um=rating, **figures)
-    return Point(open_area_pct=_open_area(target), **figures) if any(figures.values()) else _limits_point(target)
+    warp, weft = (_figures_of(side, by_pitch=is_filter) for side in (target.warp, target.weft))
+    point = Point(
+        is_filter=is_filter,
+        warp_aperture_mm=warp.aperture,
+        weft_aperture_mm=weft.aperture,
+        warp_pitch_mm=warp.pitch,
+        weft_pitch_mm=weft.pitch,
+        warp_wire_mm=warp.wire,
+        weft_wire_mm=weft.wire,
+        open_area_pct=None if is_filter else _open_area(target),
+        rating_um=target.rating.um if is_filter and target.rating else None,
+    )
+    return _limits_point(target) if point == Point() else point
+
+
+class _Figures(NamedTuple):
+    aperture: float | None
+    pitch: float | None
+    wire: float | None
+
+
+def _figures_of(side: Side, by_pitch: bool) -> _Figures:
+    """Aperture where there is one and it counts, else the pitch; and the wire. mm."""
+    aperture = float(side.aperture.mm) if side.aperture and not by_pitch else None
+    pitch = float(side.pitch.mm) if side.pitch and aperture is None else None
+    return _Figures(aperture, pitch, float(side.wire.mm) if side.wire else None)
 
 
 def _open_area(target: Target) -> float | None:
@@ -45,7 +62,8 @@ def _open_area(target: Target) -> float | None:
 def _limits_point(target: Target) -> Point:
     """The corner of stated limits, so that the near misses are those nearest to them."""
     corner = {key: low if low is not None else high for key, (low, high) in target.limits.items()}
-    pitch = corner.get("pitch_mm") or (25.4 / corner["count_per_in"] if corner.get("count_per_in") else None)
+    count = corner.get("count_per_in")
+    pitch = corner.get("pitch_mm") or (25.4 / count if count else None)
     aperture, wire = corner.get("aperture_mm"), corner.get("wire_mm")
     pitch = None if aperture is not None else pitch
     return Point(

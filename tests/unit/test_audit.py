@@ -43,7 +43,7 @@ def test_sound_cloth_passes() -> None:
         (cloth(INCH / 12, F("0.063") * INCH), "can't be woven"),
         (cloth(INCH / 2, F("10")), "gauge number as wire"),
         (cloth(INCH / 60, F("0.0075")), "open area over 95 %"),
-        (cloth(F(1), F("0.3333")), "wire of no known size"),
+        (cloth(F(1), F("0.369")), "wire of no known size"),
     ],
     ids=lambda value: value if isinstance(value, str) else "",
 )

@@ -35,7 +35,7 @@ def match_lines(answer: Answer, units: str, has_demo: bool) -> Iterator[str]:
         yield "Nothing in this catalogue lies within these limits: widen them, or match without --in-stock."
     if has_demo:
         yield ""
-        yield "Lines and lots marked 'demo' are invented: 'crosscloth store drop-demo' removes them."
+        yield from _wrapped("Lines and lots marked 'demo' are invented: 'crosscloth store drop-demo' removes them.", "", "")
 
 
 def _head(answer: Answer, units: str) -> Iterator[str]:
