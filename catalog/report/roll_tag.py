@@ -14,6 +14,7 @@ NAME, METRIC = 12, 14
 MOST_LINES = 3
 """Of one text; what is longer is cut, and ends in '…'."""
 LB_FT2 = 0.3048**2 / 0.45359237
+"""Pounds per square foot in a kilogram per square metre (exact by definition of foot and pound)."""
 DEMO = "DEMO DATA: INVENTED"
 
 

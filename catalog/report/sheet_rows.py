@@ -6,6 +6,7 @@ from fractions import Fraction
 
 from catalog.cloth import Cloth, Rating
 from catalog.report.outside_text import tame
+from catalog.report.roll_tag import LB_FT2
 from catalog.search.candidate import Candidate
 from catalog.search.comparison import Comparison, Direction
 from catalog.search.purposes import harm
@@ -198,10 +199,6 @@ def _mass(candidate: Candidate) -> Row:
 
 def _per_m2(kg_m2: float) -> str:
     return f"{kg_m2:.3g} kg/m² ({kg_m2 * LB_FT2:.3g} lb/ft²)"
-
-
-LB_FT2 = 0.3048**2 / 0.45359237
-"""Pounds per square foot in a kilogram per square metre (both exact by definition of foot and pound)."""
 
 
 def _limit(candidate: Candidate, name: str) -> str:
