@@ -8,6 +8,7 @@ from typing import Protocol
 from catalog.stock.cutting import Cutting, cut_lot
 from catalog.stock.cutting_pieces import Piece, mm_text
 from catalog.stock.cutting_reasons import why_not
+from catalog.stock.cutting_search import THOROUGH
 from catalog.stock.layout import LotCut
 from catalog.stock.lots import Lot
 
@@ -80,7 +81,7 @@ def _purchase(size: Size, pieces: Sequence[Piece], how: Cutting) -> Purchase | s
     wanted = tuple(piece.quantity for piece in pieces)
     cuts: list[LotCut] = []
     while any(wanted) and len(cuts) < MOST_ROLLS:
-        cut = cut_lot(roll, pieces, replace(how, effort=replace(how.effort, by_area=True)), wanted)
+        cut = cut_lot(roll, pieces, replace(how, effort=replace(how.effort or THOROUGH, by_area=True)), wanted)
         wanted = cut.missing
         cuts.append(cut)
     if any(wanted):

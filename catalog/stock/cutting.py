@@ -2,7 +2,7 @@
 
 from collections import Counter
 from collections.abc import Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from catalog.errors import InputError
 from catalog.stock import cutting_search
@@ -26,7 +26,12 @@ class Cutting:
     """Lost between neighbours."""
     least_remnant_mm: float = 200.0
     """Left-overs with both sides at least so long are kept."""
-    effort: Effort = THOROUGH
+    effort: Effort | None = None
+    """How long to look; None leaves it to what is asked: longer for one lot, less for each of many."""
+
+    def within(self, effort: Effort) -> "Cutting":
+        """The same, with *effort* where none is set."""
+        return self if self.effort else replace(self, effort=effort)
 
     def __post_init__(self) -> None:
         if not 0 <= self.kerf_mm < 1000 or self.least_remnant_mm < 0:
@@ -42,15 +47,16 @@ def cut_lot(
     where only offset rows hold as many as are asked. Most pieces come first, then the least length of cloth. Raises
     InputError for an empty list.
     """
-    how = how or Cutting()
+    how = (how or Cutting()).within(THOROUGH)
+    effort = how.effort or THOROUGH
     if not pieces:
         raise InputError("The cut list is empty: state what is to be cut.")
     kerf = to_um(how.kerf_mm)
     asked = tuple(wanted) if wanted is not None else tuple(piece.quantity for piece in pieces)
-    found = [(_searched(room, kerf, how.effort), room) for room in rooms(lot, kinds_of(pieces, kerf, asked), kerf)]
+    found = [(_searched(room, kerf, effort), room) for room in rooms(lot, kinds_of(pieces, kerf, asked), kerf)]
     if not found:
         return _result(lot, tuple(pieces), asked, how, Room(0, 0, 0, 0, ()), Cell(0, 0, 0, 0))
-    attempt, room = max(found, key=lambda item: how.effort.worth(item[0]))
+    attempt, room = max(found, key=lambda item: effort.worth(item[0]))
     root = _with_whole_rest(attempt, room, kerf, how)
     return _result(lot, tuple(pieces), asked, how, room, root)
 

@@ -85,7 +85,7 @@ def quotes(
     """
     if not pieces:
         raise InputError("The cut list is empty: state what is to be cut.")
-    how = how or Cutting(effort=LOOKING)
+    how = (how or Cutting()).within(LOOKING)
     found = [_quote(offer, pieces, how) for offer in offers]
     marked = outdone(found, ranks or {})
     return tuple(sorted(marked, key=lambda q: (q.cost is None, q.offer.currency, q.cost or 0, q.offer.article)))
@@ -108,7 +108,13 @@ def _words(offer: Offer, purchase: Purchase, bought: Decimal, cost: Decimal, usa
     if bought > purchase.area_m2:
         said += f"; the minimum is {_m2(bought)}"
     said += f"; {_m2(bought)} at {offer.price_per_m2} {offer.currency}/m² are {cost} {offer.currency}"
-    return f"{said} for {_m2(usable)} of pieces."
+    return f"{said} for {_m2(usable)} of pieces. {_selvedge(purchase.size.selvedge_mm)}"
+
+
+def _selvedge(selvedge_mm: int) -> str:
+    if not selvedge_mm:
+        return "No selvedge is stated: the whole width is taken as usable."
+    return f"Selvedges of {selvedge_mm} mm each side are paid for, not used."
 
 
 def _m2(area: Decimal) -> str:

@@ -11,13 +11,14 @@ from catalog.stock.cutting_pieces import Piece
 from catalog.stock.cutting_search import Effort
 from catalog.stock.layout import LotCut
 from catalog.stock.lots import Lot
-from catalog.stock.plan_choice import FILLING, STARTS, Choice, Chooser, heat_of, rank, usable_m2
+from catalog.stock.plan_choice import STARTS, Choice, Chooser, heat_of, rank, usable_m2
 from catalog.stock.plan_reasons import reasons
 
-FINAL = Effort(40, 4)
+FINAL = Effort(24, 3)
 ALIKE = 4
+FINAL_CUTS = 12
 """Choices alike in heats, lots and rolls of which the waste is compared."""
-GROUPS = {1: 60, 2: 24, 3: 12}
+GROUPS = {1: 60, 2: 12, 3: 4}
 """Sets of heats tried for each number of heats, the largest first; beyond three the largest heats only."""
 
 
@@ -64,11 +65,12 @@ def plan(lots: Sequence[Lot], pieces: Sequence[Piece], how: Cutting | None = Non
         raise InputError("The cut list is empty: state what is to be cut.")
     if len({lot.cloth for lot in lots}) > 1:
         raise InputError("The lots are of several cloths: plan each cloth by itself.")
-    how = how or Cutting(effort=FINAL)
+    how = (how or Cutting()).within(FINAL)
     chooser = Chooser(tuple(pieces), how.kerf_mm)
     usable = [lot for lot in lots if usable_m2(lot) > 0]
     choices = _choices(chooser, usable)
-    made = [(choice, _cut(choice, chooser, how)) for choice in choices]
+    few = choices[: max(1, FINAL_CUTS // max(1, len(choices[0].taken)))] if choices else []
+    made = [(choice, _cut(choice, chooser, how)) for choice in few]
     best, cuts = min(made, key=lambda item: sum(cut.waste_m2 for cut in item[1])) if made else (Choice((), ()), ())
     return Plan(tuple(pieces), cuts, reasons(chooser, usable, best))
 
@@ -125,7 +127,7 @@ def _cut(choice: Choice, chooser: Chooser, how: Cutting) -> tuple[LotCut, ...]:
     for lot, counts in choice.taken:
         cut = cut_lot(lot, chooser.pieces, how, counts)
         if not cut.is_complete:
-            cut = cut_lot(lot, chooser.pieces, replace(how, effort=FILLING), wanted)
+            cut = cut_lot(lot, chooser.pieces, replace(how, effort=chooser.filling), wanted)
         wanted = tuple(n - m for n, m in zip(wanted, cut.placed, strict=True))
         cuts.append(cut)
     return tuple(cuts)

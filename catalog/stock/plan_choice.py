@@ -12,9 +12,16 @@ from catalog.stock.lots import Lot
 
 FILLING = Effort(0, 0, fixed_attempts=2, by_area=True)
 """One look at a lot while choosing: large pieces first, what doesn't fit goes to the next lot."""
+CAREFUL = Effort(12, 0, by_area=True)
+"""The same for short lists, for which there is time."""
+SHORT_LIST = 40
 COUNTING = Effort(0, 0)
 LOOKS = 400
 """Looks at lots, after which choosing takes what it has."""
+HOPELESS = 0.05
+"""Where more of the list is missing, another beginning won't help."""
+SLOW_SIZES = 50
+"""So many sizes in the list make a look count once more: it takes longer."""
 COMPLETING_LOOKS = 12
 STARTS = 3
 
@@ -62,6 +69,7 @@ class Chooser:
         self.kerf = to_um(kerf_mm)
         self.asked: Counts = tuple(piece.quantity for piece in pieces)
         self._kinds = kinds_of(pieces, self.kerf, self.asked)
+        self.filling = CAREFUL if sum(self.asked) <= SHORT_LIST else FILLING
         self.looks = 0
         self._seen: dict[tuple[object, ...], Counts] = {}
         self._areas = [float(piece.area_m2) for piece in pieces]
@@ -75,11 +83,12 @@ class Chooser:
         """Area of so many pieces, m²."""
         return sum(area * number for area, number in zip(self._areas, counts, strict=True))
 
-    def look(self, lot: Lot, wanted: Counts, effort: Effort = FILLING) -> Counts:
+    def look(self, lot: Lot, wanted: Counts, effort: Effort | None = None) -> Counts:
         """What comes out of *lot*."""
+        effort = effort or self.filling
         key = (lot.form == "disc", lot.usable_width_mm, lot.free_length_mm, wanted, effort.by_area)
         if key not in self._seen:
-            self.looks += 1
+            self.looks += 1 + len(self.pieces) // SLOW_SIZES
             found = most_of(lot, self._wanted(wanted), self.kerf, effort)
             self._seen[key] = tuple(found[index] for index in range(len(self.pieces)))
         return self._seen[key]
@@ -108,10 +117,16 @@ class Chooser:
             choice = self._greedy(lots, start)
             if best is None or rank(choice) < rank(best):
                 best = choice
-            if (best.is_complete and len(best.taken) <= self.least_lots(lots)) or self.is_spent:
+            if self._is_settled(best, lots):
                 break
         assert best is not None
         return best
+
+    def _is_settled(self, best: Choice, lots: Sequence[Lot]) -> bool:
+        """Whether other beginnings are not worth a look."""
+        if best.is_complete:
+            return len(best.taken) <= self.least_lots(lots) or self.is_spent
+        return self.is_spent or self.area(best.missing) > HOPELESS * self.area(self.asked)
 
     def least_lots(self, lots: Sequence[Lot]) -> int:
         """No fewer lots can hold the list, by their area."""
@@ -124,12 +139,12 @@ class Chooser:
             sizes[heat_of(lot)] = sizes.get(heat_of(lot), 0.0) + usable_m2(lot)
         return _least(list(sizes.values()), self.area(self.asked))
 
-    def _greedy(self, lots: Sequence[Lot], start: int, effort: Effort = FILLING) -> Choice:
+    def _greedy(self, lots: Sequence[Lot], start: int, effort: Effort | None = None) -> Choice:
         """Fill lot after lot, each time the one that takes most; the first is the one that takes *start*-th most."""
         wanted, left = self.asked, list(lots)
         taken: list[tuple[Lot, Counts]] = []
         while any(wanted) and left:
-            last = self.completing(left, wanted) if effort is FILLING else []
+            last = self.completing(left, wanted) if effort is None else []
             lot = last[0] if last else self._largest(left, wanted, 0 if taken else start, effort)
             counts = self.look(lot, wanted, effort)
             left.remove(lot)
@@ -144,7 +159,7 @@ class Chooser:
         found = [self._greedy(lots, 0), self._greedy(lots, 0, COUNTING)]
         return min(found, key=lambda choice: (sum(choice.missing), rank(choice)))
 
-    def _largest(self, lots: Sequence[Lot], wanted: Counts, place: int, effort: Effort) -> Lot:
+    def _largest(self, lots: Sequence[Lot], wanted: Counts, place: int, effort: Effort | None) -> Lot:
         """The lot that takes most of what is wanted (remnants before rolls where equal), or the *place*-th after it."""
         worth: list[tuple[float, int, Lot]] = []
         for lot in sorted(lots, key=lambda lot: -usable_m2(lot)):
