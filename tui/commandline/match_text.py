@@ -14,6 +14,8 @@ from tui.signs import verdict_sign, verdict_words
 
 WIDTH = 80
 LOTS_SHOWN = 4
+NOTHING = 0.05
+"""A difference that would print as 0.0."""
 
 
 def match_lines(answer: Answer, units: str, has_demo: bool) -> Iterator[str]:
@@ -35,7 +37,9 @@ def match_lines(answer: Answer, units: str, has_demo: bool) -> Iterator[str]:
         yield "Nothing in this catalogue lies within these limits: widen them, or match without --in-stock."
     if has_demo:
         yield ""
-        yield from _wrapped("Lines and lots marked 'demo' are invented: 'crosscloth store drop-demo' removes them.", "", "")
+        yield from _wrapped(
+            "Lines and lots marked 'demo' are invented: 'crosscloth store drop-demo' removes them.", "", ""
+        )
 
 
 def _head(answer: Answer, units: str) -> Iterator[str]:
@@ -91,7 +95,7 @@ def candidate_lines(number: int, candidate: Candidate, units: str) -> Iterator[s
     yield f"{number:>2} {verdict_sign(candidate.verdict)} {words}"
     yield from _wrapped(candidate_name(candidate), "     ", "     ")
     for line in figure_lines(candidate, units):
-        yield from _wrapped(line, "     ", "       ")
+        yield from (f"     {part}" for part in _by_parts(line, WIDTH - 5))
     if len({*candidate.by_purpose.values()}) > 1:
         said = "; ".join(f"{name}: {verdict.value}" for name, verdict in candidate.by_purpose.items())
         yield from _wrapped(said, "     by purpose ", "     ")
@@ -154,7 +158,21 @@ def _off(candidate: Candidate, name: str) -> str:
     if deviation is None or deviation.difference is None:
         return ""
     unit = " pts" if deviation.unit == "points" else " %"
+    if abs(deviation.difference) < NOTHING:
+        return f" ±0{unit}"
     return f" {deviation.difference:+.1f}{unit}".replace("-", "−")
+
+
+def _by_parts(line: str, width: int) -> Iterator[str]:
+    """Break between figures only, which stand two spaces apart."""
+    held = ""
+    for part in line.split("  "):
+        joined = f"{held}  {part}" if held else part
+        if held and len(joined) > width:
+            yield held
+            joined = f"  {part}"
+        held = joined
+    yield held
 
 
 def _wrapped(text: str, first: str, rest: str) -> list[str]:
