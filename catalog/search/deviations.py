@@ -26,7 +26,8 @@ def _of_direction(d: Direction, c: Comparison, rules: HouseRules) -> Iterator[De
     if not c.made.is_filter:
         limit = None if d.tolerance is None or not d.asked_aperture else d.tolerance / d.asked_aperture * 100
         yield _relative(f"{d.name}.aperture", d.asked_aperture, d.found.aperture_mm, limit)
-    yield _relative(f"{d.name}.wire", d.asked_wire, d.found.wire_mm, rules.wire * 100)
+    share = rules.filter_make if c.made.is_filter else rules.wire
+    yield _relative(f"{d.name}.wire", d.asked_wire, d.found.wire_mm, share * 100)
     yield _relative(f"{d.name}.pitch", d.asked_pitch, d.found.pitch_mm, None)
 
 

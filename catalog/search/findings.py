@@ -6,7 +6,7 @@ from catalog.search.candidate import Finding
 from catalog.search.comparison import Comparison, Direction
 from catalog.search.purposes import ABOUT, BEYOND_T_ONLY, Stand, harm
 from catalog.search.rules import HouseRules
-from catalog.search.wording import both, mm, pct, points, signed_pct, um
+from catalog.search.wording import both, pct, points, signed_pct, um
 from catalog.target import Purpose
 
 HOUSE = "house rule"
@@ -125,5 +125,8 @@ def reason(all_findings: list[Finding], c: Comparison) -> str:
             first = chosen[0].message
             more = len(chosen) - 1
             return first if not more else f"{first} {chosen[1].message}"
-    aperture = next((f.message for f in all_findings if f.rule == "aperture"), "")
-    return aperture or f"Aperture {mm(c.made.warp.aperture_mm)}."
+    said = {f.rule: f.message for f in reversed(all_findings)}
+    for rule in ("aperture", "rating", "warp make"):
+        if rule in said:
+            return said[rule]
+    return f"{c.made.kind.capitalize()}, {c.made.weave.words}."

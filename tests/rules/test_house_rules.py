@@ -31,7 +31,7 @@ def test_style_is_the_house_style(what: list[str]) -> None:
     assert done.returncode == 0, done.stdout + done.stderr
 
 
-@pytest.mark.parametrize("heavy", ["textual", "sqlalchemy", "rich", "alembic", "openpyxl"])
+@pytest.mark.parametrize("heavy", ["textual", "sqlalchemy", "rich", "alembic", "openpyxl", "reportlab"])
 def test_the_command_line_loads_nothing_heavy_before_a_command_needs_it(heavy: str) -> None:
     done = run("-c", f"import sys, tui.cli; sys.exit({heavy!r} in sys.modules)")
     assert done.returncode == 0, f"importing tui.cli loads {heavy}"
