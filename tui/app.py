@@ -1,6 +1,7 @@
 """The application: themes, the one screen, manners towards the terminal."""
 
 import gc
+import logging
 import signal
 from collections.abc import Callable, Mapping
 from pathlib import Path
@@ -13,7 +14,7 @@ from textual.theme import Theme
 from tui.door import OpenStore
 from tui.keyboard import Keyboard, Settled
 from tui.memory import Memory
-from tui.presenting import UNITS
+from tui.presenting import UNITS, harmless
 from tui.screens.desk import Desk
 from tui.widgets.inks import ink_table
 
@@ -103,6 +104,19 @@ class CrossclothApp(App[None]):
         loop = asyncio.get_running_loop()
         for number in (signal.SIGTERM, signal.SIGHUP):
             loop.add_signal_handler(number, self.exit, None, 128 + number)
+
+    def _handle_exception(self, error: Exception) -> None:
+        """What was not foreseen ends the program with a sentence; the log has the rest."""
+        if self.is_headless:
+            super()._handle_exception(error)
+            return
+        logging.getLogger(__name__).error("not foreseen", exc_info=error)
+        said = f"{type(error).__name__}: {error}".splitlines()[0]
+        self.exit(
+            return_code=1,
+            message=f"crosscloth: something went wrong that was not foreseen ({harmless(said)}). "
+            "What you typed is kept; --verbose writes a log.",
+        )
 
     def action_help_quit(self) -> None:
         """Ctrl+C says how to leave instead of doing it by mistake."""

@@ -84,7 +84,12 @@ class Desk(Screen[None]):
     def on_mount(self) -> None:
         """Paint first; open the store after that."""
         self.place.settle()
+        self.watch(self, "focused", self._draw_hints, init=False)
         self.call_after_refresh(self.door.open)
+
+    def _draw_hints(self) -> None:
+        """Other hints for other things."""
+        self.query_one("#hints", LineView).show(self._hints_line)
 
     @property
     def place(self) -> Place:

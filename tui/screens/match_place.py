@@ -200,8 +200,9 @@ class MatchPlace(Place):
         return alive[self.taken].label if self.taken < len(alive) else None
 
     def _got(self, answer: "Answer") -> None:
-        """Show an answer; the highlight stays on the cloth it was on, where that is still listed."""
-        before = self.candidate.cloth.id if self.candidate else None
+        """Show an answer; where only the limits changed, the highlight stays on its cloth."""
+        same = self.answer is not None and self.answer.request.text == answer.request.text
+        before = self.candidate.cloth.id if self.candidate and same else None
         self.answer = answer
         if not answer.candidates:
             self._nothing(
@@ -283,7 +284,11 @@ class MatchPlace(Place):
     def on_resize(self) -> None:
         """Other columns fit."""
         if self.answer is not None and self.answer.candidates:
-            self.call_after_refresh(self._list, self.candidate.cloth.id if self.candidate else None)
+            self.call_after_refresh(self._list_again)
+
+    def _list_again(self) -> None:
+        """The same list, on the same cloth."""
+        self._list(self.candidate.cloth.id if self.candidate else None)
 
     def _reading_lines(self, width: int) -> Sequence[Line]:
         from tui.widgets.reading_lines import reading_lines

@@ -74,9 +74,10 @@ def heading(candidate: Candidate, ascii_only: bool = False) -> Line:
 
 def purpose_line(candidate: Candidate, ascii_only: bool) -> Lines:
     """What each purpose says, where they don't say the same; and that the aperture lies to the harm side."""
-    pieces: list[Piece] = [("harm side: measure the roll   ", "risk")] if candidate.harm_side else []
+    harm: Piece = ("harm side: measure the roll   ", "risk")
     if len(set(candidate.by_purpose.values())) < 2:
-        return [pieces] if pieces else []
+        return [[harm]] if candidate.harm_side else []
+    pieces: list[Piece] = [("harm side   ", "risk")] if candidate.harm_side else []
     for name, verdict in candidate.by_purpose.items():
         pieces += [(f"for {name} ", "muted"), sealed(verdict, ascii_only), ("   ", "text")]
     return [pieces]
