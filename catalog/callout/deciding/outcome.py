@@ -90,6 +90,10 @@ def _survivors(draft: Draft, alive: list[Tried], ruled_out: list[Tried], rank: i
         draft.problem_at(ruled_out[0].fault.code, ruled_out[0].fault.message, place_of(_lengths(ruled_out[0].made)))
     if done.must_ask:
         done.question = question(done.readings)
+        if done.question is None and not draft.problems:
+            said = next((n for o in turned[0].made.options for n in o.notes), turned[0].label or "the figures")
+            message = f"{said[:1].upper()}{said[1:]}; taken otherwise it makes no cloth: is that meant?"
+            draft.problem_at("E_UNIT", message, place_of(_lengths(turned[0].made)))
     return done
 
 

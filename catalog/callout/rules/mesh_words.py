@@ -22,6 +22,10 @@ def mesh_figures(draft: Draft) -> None:
         row = [m for m in members if not m.taken and m.slot == "mesh"][:2]
         if not row:
             continue
+        if draft.is_slotted and (pair := _slot_sides(item, row)):
+            take(pair, "aperture")
+            draft.claims.append(length_claim("aperture", pair, pair[1].unit))
+            continue
         if row[0].unit == "hundredths":
             take(row, "unknown")
             message = f"{row[0].text} mesh may be two counts, a band of particles or hundredths of a millimetre: which?"
@@ -32,6 +36,13 @@ def mesh_figures(draft: Draft) -> None:
             _small_mesh(draft, row)
         else:
             _mesh_counts(draft, row if len(row) == 2 or item.kind != "chain" else with_twin(members, row[0]))
+
+
+def _slot_sides(item: Item, row: list[Item]) -> list[Item]:
+    """'Oblong mesh 2 x 10 mm': the two sides of the opening; the unit stands behind the second."""
+    free = [m for m in item.members if not m.taken]
+    is_pair = len(free) == 2 and row[0] is free[0] and free[0].is_count_like and free[1].is_length
+    return free if is_pair else []
 
 
 def _mesh_lengths(draft: Draft, row: list[Item]) -> None:
