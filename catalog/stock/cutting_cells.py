@@ -80,11 +80,13 @@ class Cell:
 
     def leaves(self) -> Iterator["Cell"]:
         """Every part that isn't cut any further, in the order of the cuts."""
-        if self.parts is None:
-            yield self
-        else:
-            for part in self.parts:
-                yield from part.leaves()
+        open_parts = [self]  # a stack, since a long list cuts deeper than calls may nest
+        while open_parts:
+            part = open_parts.pop()
+            if part.parts is None:
+                yield part
+            else:
+                open_parts.extend(reversed(part.parts))
 
 
 def place(cell: Cell, width: int, length: int, content: Content, is_across_first: bool) -> list[Cell]:

@@ -69,6 +69,8 @@ SPLITS: tuple[Split, ...] = (
 
 BLOCK, ROW, SINGLE = 2, 1, 0
 """How much of one kind is placed at a time."""
+ROW_STEPS = 25
+"""Where rows are many, so large a part of them goes at a time."""
 
 
 def fill(
@@ -121,5 +123,6 @@ def _cluster(
         if found:
             return discs.block_width(found), discs.block_length(found), found
     columns = 1 if grain == SINGLE else min(cell.width // w, wanted)
-    rows = 1 if grain != BLOCK else min(cell.length // h, wanted // columns)
+    most = min(cell.length // h, wanted // columns)
+    rows = {SINGLE: 1, ROW: max(1, most // ROW_STEPS), BLOCK: most}[grain]
     return columns * w, rows * h, Grid(kind.index, w, h, columns, rows, is_turned)

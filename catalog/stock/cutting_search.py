@@ -190,14 +190,22 @@ def _lies_in(kind: Kind, width: int, length: int) -> bool:
     return any(w <= width and h <= length for w, h, _ in kind.shapes)
 
 
-def clip(cell: Cell, length: int) -> Cell:
-    """*cell* without what lies beyond *length*: no piece does."""
+def clip(root: Cell, length: int) -> Cell:
+    """A copy of *root* without what lies beyond *length*, where no piece does."""
+    whole = _clipped(root, length)
+    open_parts = [whole]
+    while open_parts:
+        made = open_parts.pop()
+        while made.parts is not None and made.parts[1].y >= length:
+            first = made.parts[0]
+            made.content, made.parts, made.is_cut_across = first.content, first.parts, first.is_cut_across
+        if made.parts is not None:
+            first, second = made.parts
+            made.parts = _clipped(first, length), _clipped(second, length)
+            open_parts += made.parts
+    return whole
+
+
+def _clipped(cell: Cell, length: int) -> Cell:
     end = min(cell.length, length - cell.y)
-    if cell.parts is None:
-        return replace(cell, length=end)
-    first, second = cell.parts
-    if second.y >= length:
-        return clip(first, length)
-    made = Cell(cell.x, cell.y, cell.width, end, None, None, cell.is_cut_across)
-    made.parts = clip(first, length), clip(second, length)
-    return made
+    return Cell(cell.x, cell.y, cell.width, end, cell.content, cell.parts, cell.is_cut_across)

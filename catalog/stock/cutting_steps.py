@@ -1,6 +1,7 @@
 """The straight cuts of a layout in words, in an order in which they can be made."""
 
 from collections.abc import Sequence
+from itertools import count
 
 from catalog.stock.cutting_cells import Cell, Grid, Stagger
 from catalog.stock.cutting_pieces import UM_PER_MM, Piece, mm_text
@@ -13,45 +14,51 @@ def steps(root: Cell, pieces: Sequence[Piece], kerf: int) -> tuple[str, ...]:
     "Across" is across the warp, from side to side; "along" is with the warp, from end to end.
     """
     said: list[str] = []
-    _tell(root, "the cloth", "", pieces, kerf, said)
+    to_tell = [(root, "the cloth")]
+    numbers = count(1)
+    while to_tell:
+        cell, name = to_tell.pop()
+        if cell.parts is None:
+            said += [] if cell.content is None else [_sentence(name, _content(cell.content, pieces, kerf))]
+            continue
+        parts = _flat(cell)
+        names = [f"part {next(numbers)}" if min(part.width, part.length) > kerf else "" for part in parts]
+        said.append(_sentence(name, _cuts(cell, parts, names, kerf)))
+        to_tell += reversed(list(zip(parts, names, strict=True)))
     return tuple(said)
 
 
-def _tell(cell: Cell, name: str, number: str, pieces: Sequence[Piece], kerf: int, said: list[str]) -> None:
-    if cell.parts is None:
-        if cell.content is not None:
-            said.append(_sentence(name, _content(cell.content, cell, pieces, kerf)))
-        return
-    parts = _flat(cell, cell.is_cut_across)
-    numbers = [f"{number}.{i}" if number else str(i) for i in range(1, len(parts) + 1)]
+def _cuts(cell: Cell, parts: Sequence[Cell], names: Sequence[str], kerf: int) -> str:
     places = ", ".join(_mm(_end(part, cell) - kerf) for part in parts[:-1])
-    list_of = "; ".join(_part(part, no, kerf) for part, no in zip(parts, numbers, strict=True))
-    way = "across" if cell.is_cut_across else "along"
-    said.append(_sentence(name, f"cut {way} at {places} mm: {list_of}."))
-    for part, no in zip(parts, numbers, strict=True):
-        _tell(part, f"part {no}", no, pieces, kerf, said)
+    made = "; ".join(_part(part, name, kerf) for part, name in zip(parts, names, strict=True))
+    return f"cut {'across' if cell.is_cut_across else 'along'} at {places} mm: {made}."
 
 
-def _flat(cell: Cell, is_across: bool) -> list[Cell]:
+def _flat(cell: Cell) -> list[Cell]:
     """Parts that successive cuts in one direction make."""
-    if cell.parts is None or cell.is_cut_across != is_across:
-        return [cell]
-    return [part for half in cell.parts for part in _flat(half, is_across)]
+    found: list[Cell] = []
+    to_see = [cell]
+    while to_see:
+        part = to_see.pop()
+        if part.parts is not None and part.is_cut_across == cell.is_cut_across:
+            to_see.extend(reversed(part.parts))
+        else:
+            found.append(part)
+    return found
 
 
 def _end(part: Cell, of: Cell) -> int:
     return part.y + part.length - of.y if of.is_cut_across else part.x + part.width - of.x
 
 
-def _part(part: Cell, number: str, kerf: int) -> str:
-    width, length = part.width - kerf, part.length - kerf
-    if width <= 0 or length <= 0:
+def _part(part: Cell, name: str, kerf: int) -> str:
+    if not name:
         return "a trim within the kerf"
     left = ", left over" if part.parts is None and part.content is None else ""
-    return f"part {number} {_mm(width)} × {_mm(length)}{left}"
+    return f"{name} {_mm(part.width - kerf)} × {_mm(part.length - kerf)}{left}"
 
 
-def _content(content: Grid | Stagger, cell: Cell, pieces: Sequence[Piece], kerf: int) -> str:
+def _content(content: Grid | Stagger, pieces: Sequence[Piece], kerf: int) -> str:
     piece = pieces[content.kind]
     if isinstance(content, Stagger):
         return _offset(content, letter(content.kind), piece)

@@ -100,8 +100,8 @@ def test_a_piece_as_wide_as_the_usable_width_needs_no_cut_beside_it() -> None:
 def test_the_cuts_are_told_in_the_order_in_which_they_are_made() -> None:
     assert twelve().steps == (
         "The cloth: cut across at 1415 mm: part 1 1165 × 1415; part 2 1165 × 980, left over.",
-        "Part 1: cut along at 1060 mm: part 1.1 1060 × 1415; part 1.2 100 × 1415, left over.",
-        "Part 1.1: cut across into 4 strips of 350, each of them along into 3 of 350 mm: 12 × A, 350 × 350; "
+        "Part 1: cut along at 1060 mm: part 3 1060 × 1415; part 4 100 × 1415, left over.",
+        "Part 3: cut across into 4 strips of 350, each of them along into 3 of 350 mm: 12 × A, 350 × 350; "
         "cut a disc Ø 350 mm out of each.",
     )
 
@@ -150,3 +150,13 @@ def test_an_empty_cut_list_and_a_kerf_below_zero_are_refused() -> None:
 
 def test_pieces_after_the_26th_are_marked_by_two_letters() -> None:
     assert [letter(index) for index in (0, 25, 26, 51, 52)] == ["A", "Z", "AA", "AZ", "BA"]
+
+
+def test_two_hundred_sizes_and_thousands_of_pieces_are_laid_out_and_told() -> None:
+    """By hand: 1199 // 20 = 59 across by 9000 // 31 = 290 rows hold more than the 9000 that are asked."""
+    roll = Lot("L-1", "c", "roll", 1219, 10, 30480, 0, "A")
+    sizes = [Piece(1, 100 + index, 300 + 2 * index) for index in range(200)]
+    assert len(cut_lot(roll, sizes, KERF_5).placements) == 200
+    many = cut_lot(Lot("L-2", "c", "roll", 1219, 10, 9000, 0, "A"), [Piece(9000, 20, 31)])
+    assert many.is_complete
+    assert len(many.steps) < 10
