@@ -6,7 +6,7 @@ from dataclasses import dataclass, replace
 
 from catalog.errors import InputError
 from catalog.stock import cutting_search
-from catalog.stock.cutting_cells import Cell, Grid, Stagger
+from catalog.stock.cutting_cells import Cell, Grid, Stagger, clip
 from catalog.stock.cutting_filling import Attempt, Kind
 from catalog.stock.cutting_notes import notes
 from catalog.stock.cutting_pieces import UM_PER_MM, Piece, to_um
@@ -79,7 +79,7 @@ def _with_whole_rest(attempt: Attempt, room: Room, kerf: int, how: Cutting) -> C
     """The pieces cut off the cloth first, so that the rest keeps its full width, where that rest is worth keeping."""
     width, length = room.width + kerf, room.length + kerf
     kept = min(room.width, length - attempt.length - kerf)
-    inside = cutting_search.clip(attempt.root, attempt.length)
+    inside = clip(attempt.root, attempt.length)
     root = Cell(0, 0, width, length)
     if not attempt.count:
         return root

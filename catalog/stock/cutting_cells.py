@@ -101,3 +101,24 @@ def place(cell: Cell, width: int, length: int, content: Content, is_across_first
             rest.append(left)
     cell.content = content
     return rest
+
+
+def clip(root: Cell, length: int) -> Cell:
+    """A copy of *root* without what lies beyond *length*, where no piece does."""
+    whole = _clipped(root, length)
+    open_parts = [whole]
+    while open_parts:
+        made = open_parts.pop()
+        while made.parts is not None and made.parts[1].y >= length:
+            first = made.parts[0]
+            made.content, made.parts, made.is_cut_across = first.content, first.parts, first.is_cut_across
+        if made.parts is not None:
+            first, second = made.parts
+            made.parts = _clipped(first, length), _clipped(second, length)
+            open_parts += made.parts
+    return whole
+
+
+def _clipped(cell: Cell, length: int) -> Cell:
+    end = min(cell.length, length - cell.y)
+    return Cell(cell.x, cell.y, cell.width, end, cell.content, cell.parts, cell.is_cut_across)

@@ -4,7 +4,7 @@ Sizes are whole micrometres with one kerf added (see cutting_cells).
 """
 
 from collections.abc import Callable, Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import TypeAlias
 
 from catalog.stock import discs
@@ -126,3 +126,21 @@ def _cluster(
     most = min(cell.length // h, wanted // columns)
     rows = {SINGLE: 1, ROW: max(1, most // ROW_STEPS), BLOCK: most}[grain]
     return columns * w, rows * h, Grid(kind.index, w, h, columns, rows, is_turned)
+
+
+def straight_rows(width: int, length: int, kinds: Sequence[Kind]) -> Attempt:
+    """One kind after the other in straight rows from side to side: what a person lays out without a plan."""
+    order = [replace(kind, shapes=(_way(width, length, kind),)) for kind in kinds]
+    return fill(width, length, order, FITS[2], SPLITS[0], BLOCK)
+
+
+def _way(width: int, length: int, kind: Kind) -> tuple[int, int, bool]:
+    """The way to lie that takes the least length for the list, or gives most pieces."""
+    ways = [shape for shape in kind.shapes if shape[0] <= width and shape[1] <= length]
+
+    def worth(shape: tuple[int, int, bool]) -> tuple[int, int]:
+        columns = width // shape[0]
+        rows = min(length // shape[1], -(-kind.quantity // columns))
+        return min(kind.quantity, columns * rows), -rows * shape[1]
+
+    return max(ways, key=worth)

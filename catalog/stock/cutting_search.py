@@ -13,8 +13,19 @@ from itertools import islice
 from random import Random
 from typing import TypeAlias
 
-from catalog.stock.cutting_cells import Cell
-from catalog.stock.cutting_filling import BLOCK, FITS, ROW, SINGLE, SPLITS, Attempt, Fit, Kind, Split, fill
+from catalog.stock.cutting_filling import (
+    BLOCK,
+    FITS,
+    ROW,
+    SINGLE,
+    SPLITS,
+    Attempt,
+    Fit,
+    Kind,
+    Split,
+    fill,
+    straight_rows,
+)
 from catalog.stock.cutting_uniform import blocks
 
 SEED = 1195
@@ -111,24 +122,6 @@ def _most(width: int, length: int, kinds: Sequence[Kind], effort: Effort, stagge
     return best
 
 
-def straight_rows(width: int, length: int, kinds: Sequence[Kind]) -> Attempt:
-    """One kind after the other in straight rows from side to side: what a person lays out without a plan."""
-    order = [replace(kind, shapes=(_way(width, length, kind),)) for kind in kinds]
-    return fill(width, length, order, FITS[2], SPLITS[0], BLOCK)
-
-
-def _way(width: int, length: int, kind: Kind) -> tuple[int, int, bool]:
-    """The way to lie that takes the least length for the list, or gives most pieces."""
-    ways = [shape for shape in kind.shapes if shape[0] <= width and shape[1] <= length]
-
-    def worth(shape: tuple[int, int, bool]) -> tuple[int, int]:
-        columns = width // shape[0]
-        rows = min(length // shape[1], -(-kind.quantity // columns))
-        return min(kind.quantity, columns * rows), -rows * shape[1]
-
-    return max(ways, key=worth)
-
-
 def _shortest(width: int, best: Attempt, kinds: Sequence[Kind], effort: Effort) -> Attempt:
     """The same pieces in less length, where attempts in a shorter cloth succeed."""
     low = max(-(-best.area // width), max(min(h for _, h, _ in kind.shapes) for kind in kinds))
@@ -188,24 +181,3 @@ def _ceiling(area: int, kinds: Sequence[Kind]) -> int:
 
 def _lies_in(kind: Kind, width: int, length: int) -> bool:
     return any(w <= width and h <= length for w, h, _ in kind.shapes)
-
-
-def clip(root: Cell, length: int) -> Cell:
-    """A copy of *root* without what lies beyond *length*, where no piece does."""
-    whole = _clipped(root, length)
-    open_parts = [whole]
-    while open_parts:
-        made = open_parts.pop()
-        while made.parts is not None and made.parts[1].y >= length:
-            first = made.parts[0]
-            made.content, made.parts, made.is_cut_across = first.content, first.parts, first.is_cut_across
-        if made.parts is not None:
-            first, second = made.parts
-            made.parts = _clipped(first, length), _clipped(second, length)
-            open_parts += made.parts
-    return whole
-
-
-def _clipped(cell: Cell, length: int) -> Cell:
-    end = min(cell.length, length - cell.y)
-    return Cell(cell.x, cell.y, cell.width, end, cell.content, cell.parts, cell.is_cut_across)

@@ -64,7 +64,7 @@ def can_be_cut(boxes: Sequence[Box]) -> bool:
     return False
 
 
-@settings(max_examples=60, deadline=None)
+@settings(max_examples=40, deadline=None)
 @given(LOTS, LISTS, KERFS)
 def test_pieces_lie_between_the_selvedges_a_kerf_apart_and_never_on_what_is_reserved(
     lot: Lot, pieces: list[Piece], kerf: float
@@ -79,7 +79,7 @@ def test_pieces_lie_between_the_selvedges_a_kerf_apart_and_never_on_what_is_rese
         assert all(are_apart(a, b, kerf) for b in cut.placements[i + 1 :])
 
 
-@settings(max_examples=60, deadline=None)
+@settings(max_examples=40, deadline=None)
 @given(LOTS, LISTS, KERFS)
 def test_sizes_and_numbers_are_those_of_the_cut_list(lot: Lot, pieces: list[Piece], kerf: float) -> None:
     cut = made(lot, pieces, kerf)
@@ -89,7 +89,7 @@ def test_sizes_and_numbers_are_those_of_the_cut_list(lot: Lot, pieces: list[Piec
         assert (p.width_mm, p.length_mm) in ((asked,) if pieces[p.piece].warp_bound else (asked, asked[::-1]))
 
 
-@settings(max_examples=60, deadline=None)
+@settings(max_examples=40, deadline=None)
 @given(LOTS, LISTS, KERFS)
 def test_straight_cuts_from_edge_to_edge_part_the_pieces_and_what_is_left(
     lot: Lot, pieces: list[Piece], kerf: float
@@ -124,13 +124,13 @@ def straight_count(pieces: Sequence[Piece], lot: Lot, kerf: float) -> int:
     return count
 
 
-@settings(max_examples=150, deadline=None)
+@settings(max_examples=80, deadline=None)
 @given(LOTS, LISTS, KERFS)
 def test_no_list_comes_out_worse_than_in_straight_rows(lot: Lot, pieces: list[Piece], kerf: float) -> None:
     assert len(made(lot, pieces, kerf).placements) >= straight_count(pieces, lot, kerf)
 
 
-@settings(max_examples=60, deadline=None)
+@settings(max_examples=40, deadline=None)
 @given(LOTS, RECTANGLES | DISCS, KERFS)
 def test_one_size_takes_no_more_length_than_in_straight_rows(lot: Lot, piece: Piece, kerf: float) -> None:
     ways = [(piece.across_mm, piece.along_mm)] + ([] if piece.warp_bound else [(piece.along_mm, piece.across_mm)])
