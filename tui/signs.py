@@ -28,7 +28,7 @@ def verdict_sign(verdict: Verdict) -> str:
 def verdict_words(candidate: Candidate) -> str:
     """'interchangeable, harm side: measure the roll', 'near, safe side, turned', …"""
     parts = [WORDS[candidate.verdict]]
-    if candidate.harm_side:
+    if candidate.harm_side and candidate.verdict is Verdict.INTERCHANGEABLE:
         parts.append("harm side: measure the roll")
     if candidate.turned:
         parts.append("turned 90°")

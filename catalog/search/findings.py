@@ -48,7 +48,8 @@ def _apertures(c: Comparison, purposes: tuple[Purpose, ...]) -> Iterator[Finding
         off = d.aperture_off
         label = _named(prefix, "aperture")
         if off is None or not d.asked_aperture or d.tolerance is None:
-            yield Finding("aperture", True, f"{label} {both(d.found.aperture_mm)}: not asked, not judged.")
+            if "aperture_mm" not in c.target.limits:
+                yield Finding("aperture", True, f"{label} {both(d.found.aperture_mm)}: not asked, not judged.")
             continue
         if abs(off) <= d.aperture_rounding:
             yield Finding("aperture", True, f"{label} {both(d.found.aperture_mm)} equals the asked one to rounding.")
@@ -73,7 +74,8 @@ def _wires(c: Comparison, rules: HouseRules) -> Iterator[Finding]:
         label = _named(prefix, "wire")
         off = d.wire_off
         if off is None or not d.asked_wire:
-            yield Finding("wire", True, f"{label} {both(d.found.wire_mm)}: not asked, not judged.")
+            if "wire_mm" not in c.target.limits:
+                yield Finding("wire", True, f"{label} {both(d.found.wire_mm)}: not asked, not judged.")
         elif abs(off) > d.wire_rounding:
             within = abs(off) <= rules.wire * d.asked_wire
             line = f"{'within' if within else 'outside'} {float(rules.wire * 100):g} %"
@@ -83,6 +85,8 @@ def _wires(c: Comparison, rules: HouseRules) -> Iterator[Finding]:
 
 def _open_area(c: Comparison, rules: HouseRules) -> Iterator[Finding]:
     off = c.open_points
+    if off is None and "open_area_pct" in c.target.limits:
+        return
     if off is None:
         yield Finding("open area", True, f"Open area {pct(c.found_open * 100)}: not asked, not judged.")
     elif abs(off) > rules.open_area_points:

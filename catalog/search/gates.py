@@ -116,14 +116,22 @@ def limit_gates(c: Comparison) -> Iterator[Finding]:
         if found is None:
             yield Finding(f"limit {key}", None, f"{_label(key)} of this cloth is not on record.", "as asked")
             continue
-        for low, high in found:
-            short = (least is not None and low < least) or (most is not None and high > most)
-            side, bound = ("least", least) if least is not None and low < least else ("most", most)
-            if short and bound is not None:
-                value = low if side == "least" else high
-                text = f"{_label(key)} is {_figure(key, value)}; asked is at {side} {_figure(key, bound)}."
-                yield Finding(f"limit {key}", False, text, "as asked")
-                break
+        yield _limit_finding(key, least, most, found)
+
+
+def _limit_finding(key: str, least: float | None, most: float | None, found: list[tuple[float, float]]) -> Finding:
+    for low, high in found:
+        short = (least is not None and low < least) or (most is not None and high > most)
+        side, bound = ("least", least) if least is not None and low < least else ("most", most)
+        if short and bound is not None:
+            value = low if side == "least" else high
+            text = f"{_label(key)} is {_figure(key, value)}; asked is at {side} {_figure(key, bound)}."
+            return Finding(f"limit {key}", False, text, "as asked")
+    values = " and ".join(dict.fromkeys(_figure(key, low) for low, _ in found))
+    bounds = " and ".join(
+        f"at {side} {_figure(key, bound)}" for side, bound in (("least", least), ("most", most)) if bound is not None
+    )
+    return Finding(f"limit {key}", True, f"{_label(key)} {values} is inside the limit, {bounds}.", "as asked")
 
 
 def limited_figure(c: Comparison, key: str) -> list[tuple[float, float]] | None:

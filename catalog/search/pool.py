@@ -5,6 +5,7 @@ from typing import NamedTuple
 
 from catalog.callout.reading import Side
 from catalog.cloth import Cloth
+from catalog.reference import alloys
 from catalog.search.reader import Filters, Point, Range, Reader
 from catalog.search.rules import HouseRules
 from catalog.target import Target
@@ -13,6 +14,7 @@ LEAST_POOL = 50
 Found = tuple[Cloth, float | None, bool]
 RANGE_OF_LIMIT = {
     "aperture_mm": ("warp_aperture_mm", "weft_aperture_mm"),
+    "pitch_mm": ("warp_pitch_mm", "weft_pitch_mm"),
     "wire_mm": ("warp_wire_mm", "weft_wire_mm"),
     "open_area_pct": ("open_area_pct",),
     "mass_kg_m2": ("mass_kg_m2",),
@@ -105,12 +107,24 @@ def gather(target: Target, reader: Reader, limit: int, in_stock: bool, rules: Ho
     boxed = reader.box(point, ranges, filters) if ranges else ()
     for cloth, distance, turned in (*nearest, *boxed):
         found.setdefault(cloth.id, (cloth, distance, turned))
-    if target.limits:
-        for cloth in reader.select(_within_limits(target, in_stock)):
+    if target.limits and not ranges:
+        for cloth in reader.select(_within_limits(target, in_stock), "id", max(LEAST_POOL, limit)):
             found.setdefault(cloth.id, (cloth, None, False))
     return list(found.values())
 
 
 def _within_limits(target: Target, in_stock: bool) -> Filters:
-    ranges = {name: bounds for key, bounds in target.limits.items() for name in RANGE_OF_LIMIT.get(key, ())}
-    return Filters(ranges=ranges, in_stock=in_stock)
+    """What lies inside stated limits and may pass the alloy gate: of these any number is as good as another."""
+    limits = dict(target.limits)
+    if "count_per_in" in limits:
+        low, high = limits.pop("count_per_in")
+        limits["pitch_mm"] = (25.4 / high if high else None, 25.4 / low if low else None)
+    ranges = {name: bounds for key, bounds in limits.items() for name in RANGE_OF_LIMIT.get(key, ())}
+    return Filters(ranges=ranges, in_stock=in_stock, alloys=_passing_alloys(target))
+
+
+def _passing_alloys(target: Target) -> frozenset[str]:
+    asked = target.reading.alloy if target.alloy_rule == "same" else target.alloy_rule
+    if asked is None or asked == "any" or alloys.alloy(asked) is None:
+        return frozenset()
+    return frozenset(a.id for a in alloys.alloys() if alloys.gate(asked, a.id).outcome != "blocked")
