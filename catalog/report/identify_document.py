@@ -1,12 +1,15 @@
 """The JSON documents of naming a roll and of receiving one: keys are added, never renamed."""
 
+from collections.abc import Sequence
 from typing import Any
 
+from catalog.callout.reading import Understanding
 from catalog.report.documents import SCHEMA, cloth_document
 from catalog.search.candidate import Finding
 from catalog.search.identify import Identification, Identified
 from catalog.search.improving import Better
 from catalog.search.measured import Count, Scalar
+from catalog.search.outcome import Outcome
 from catalog.search.receipt import Check, Receipt
 from catalog.search.separating import Next
 
@@ -19,8 +22,10 @@ def identify_document(result: Identification) -> Document:
         "schema": SCHEMA,
         "measured": {name: _measured(m) for name, m in result.evidence.measured.items() if m is not None},
         "candidates": [_candidate(one) for one in result.candidates],
+        "set95": [one.cloth.id for one in result.survivors],
         "next": _next(result.next) if result.next else None,
         "looked_at": result.looked_at,
+        "assumed": [name for name, m in result.evidence.measured.items() if isinstance(m, Scalar) and m.is_assumed],
         "warnings": list(result.warnings),
         "notes": list(result.notes),
     }
@@ -37,6 +42,17 @@ def receipt_document(receipt: Receipt, text: str) -> Document:
         "checks": [_check(check) for check in receipt.checks],
         "findings": [_finding(finding) for finding in receipt.findings],
         "notes": list(receipt.notes),
+    }
+
+
+def receipts_document(receipts: Sequence[Receipt], verdict: Outcome, understanding: Understanding) -> Document:
+    """The check of a callout that may have more readings than one: the first in full, all under 'readings'."""
+    documents = [receipt_document(receipt, understanding.text) for receipt in receipts]
+    keys = ("reading", "verdict", "checks", "findings")
+    return documents[0] | {
+        "verdict": verdict.value,
+        "question": understanding.question,
+        "readings": [{key: document[key] for key in keys} for document in documents],
     }
 
 
