@@ -73,7 +73,7 @@ def alloy_words(alloy: str | None) -> str:
         return ALLOY_WORDS[alloy]
     if "stainless" in known.family and known.en_numbers:
         return f"stainless {known.en_numbers[0]} ({alloy})"
-    return f"{FAMILY_WORDS[known.family]} {alloy}" if known.family in FAMILY_WORDS else known.generic_name
+    return f"{FAMILY_WORDS[known.family]} {alloy}" if known.family in FAMILY_WORDS else known.generic_name.partition(" (")[0]
 
 
 def _en_number(alloy: str | None) -> str:

@@ -116,7 +116,11 @@ def _digits(length: Length) -> int:
     """Significant digits of the spelling: of several that agree, the roundest was declared,
     the rest are conversions.
     """
-    return len("".join(c for c in length.written if c.isdecimal()).strip("0")) or (1 if length.written else 9)
+    if not length.written:
+        return 9
+    digits = "".join(c for c in length.written if c.isdecimal()).lstrip("0")
+    is_decimal = "." in length.written or "," in length.written
+    return len(digits if is_decimal else digits.rstrip("0")) or 1
 
 
 def _sum_clash(pitch: Length, wire: Length, aperture: Length) -> list[Clash]:

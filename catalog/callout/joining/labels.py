@@ -72,26 +72,28 @@ def _set(item: Item, slot: str, backwards: bool) -> None:
     row = item.members[::-1] if backwards else item.members
     row[0].slot = slot
     for member, before in zip(row[1:], row, strict=False):
-        if member.slot is not None or not _alike(member, before, slot):
+        if member.slot is not None or not _alike(member, before, slot, backwards):
             return
         member.slot = slot
 
 
-def _alike(member: Item, before: Item, slot: str) -> bool:
-    whole = member.is_count_like or before.is_count_like
-    if member.unit != before.unit and not (slot == "aperture" and whole):
-        return False
+def _alike(member: Item, before: Item, slot: str, backwards: bool) -> bool:
+    """True where a label reaches on: to another count, to another length; a unit behind the last serves a bare one."""
     if slot in ("mesh", "count"):
-        return member.is_count_like == before.is_count_like
+        return member.unit == before.unit and member.is_count_like == before.is_count_like
+    if slot == "wire" and backwards and member.is_count_like != before.is_count_like:
+        return False
     if slot == "wire":
-        return member.unit == "gauge" or (member.is_count_like == before.is_count_like and _close(member, before))
-    return slot in ("aperture", "pitch") and (
-        member.is_count_like == before.is_count_like or member.is_length or before.is_length
-    )
+        return member.unit == "gauge" or (_same_unit(member, before) and _close(member, before, 4 if backwards else 20))
+    return slot in ("aperture", "pitch") and _same_unit(member, before)
 
 
-def _close(member: Item, before: Item) -> bool:
-    """True where two wires of one cloth may stand side by side: less than fourfold apart."""
+def _same_unit(member: Item, before: Item) -> bool:
+    return member.unit == before.unit or member.is_count_like or before.is_count_like
+
+
+def _close(member: Item, before: Item, times: int) -> bool:
+    """True where two wires of one cloth may stand side by side: less than so many times apart."""
     if not member.number or not before.number or not before.number.value:
         return False
-    return 1 / 4 < member.number.value / before.number.value < 4
+    return 1 / times < member.number.value / before.number.value < times

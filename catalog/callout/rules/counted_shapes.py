@@ -67,7 +67,7 @@ def beside_a_count(draft: Draft, number: Item) -> None:
     and so is the opening of the sieve of that number.
     """
     if knows_wire(draft):
-        if not states_opening(draft) and (number.is_length or number.number):
+        if not draft.is_dutch and not states_opening(draft) and (number.is_length or number.number):
             take([number], "aperture")
             draft.choices.append(
                 unit_options(draft, "aperture", [number])

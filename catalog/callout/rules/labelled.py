@@ -82,6 +82,10 @@ def _apertures(draft: Draft) -> None:
     """
     for row in groups(draft, "aperture"):
         take(row, "aperture")
+        if draft.is_dutch:
+            message = f"Filter cloth has no straight opening: is {row[0].text} {row[0].unit or ''} its rating?"
+            draft.problem("E_NOT_UNDERSTOOD", message.replace("  ", " "), row[0])
+            continue
         if draft.is_sieve and row[0].is_length and sieve_opening(draft, row[0]):
             said_again(draft, "aperture", row)
         else:

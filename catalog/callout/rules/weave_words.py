@@ -13,7 +13,7 @@ def weaves(draft: Draft) -> None:
         found.setdefault(item.senses["weave"], item)
     for item in draft.terms("filter"):
         item.taken = "kind of goods"
-        draft.is_dutch = True
+        draft.is_dutch = draft.is_dutch or not _looks_square(draft)
     if any("dutch" in name for name in found):
         draft.is_dutch = True
     if "dutch" in found and len(found) == 2:
@@ -24,6 +24,17 @@ def weaves(draft: Draft) -> None:
     elif found and not (len(found) == 1 and "dutch" in found):
         _odd_weave(draft, found, known)
     draft.weave_words = ", ".join(item.text for item in found.values())
+
+
+def _looks_square(draft: Draft) -> bool:
+    """True where a filter's cloth has an opening, or one count: then it is square cloth, whatever it is used for."""
+    numbers = draft.all_numbers()
+    if any(n.slot in ("aperture", "pitch") for n in numbers):
+        return True
+    chains = [i for i in draft.items if i.kind == "chain" and all(m.is_count_like for m in i.members[:2])]
+    if chains:
+        return all(c.members[0].number and c.members[0].number == c.members[1].number for c in chains)
+    return any(n.slot in ("mesh", "count") and not n.is_length for n in numbers)
 
 
 def _combined(draft: Draft, found: dict[str, Item]) -> dict[str, Item]:

@@ -52,9 +52,22 @@ MIXED_NUMBER = re.compile(r"\d{1,3}-\d{1,2}/\d{1,2}")
 GOST_MESH = re.compile(r"(?:(?P<group>[123])-)?(?P<aperture>\d{1,3}(?:[.,]\d+)?)-(?P<wire>\d{1,3}(?:[.,]\d+)?)")
 
 
+FAMILY_NUMBERS = (
+    (re.compile(r"^(?:nickel|ni)[ -]?(?=20[01]$)", re.IGNORECASE), "Ni"),
+    (re.compile(r"^(?:alumini?um|alu?|alloy|en[ -]?aw)[ -]?(?=(?:1350|5056)A?$)", re.IGNORECASE), "Al"),
+    (re.compile(r"^ti(?:tan(?:ium)?)?[ -]?(?:grade|gr|g)?[. -]*(?=\d$)", re.IGNORECASE), "TiGr"),
+    (re.compile(r"^(?:duplex[ -]?)?s?(?=2205$)", re.IGNORECASE), ""),
+)
+"""A family's name before a number, and how the table spells the two."""
+
+
 def alloy_id(name: str) -> str:
     """The id of the alloy in the table, else the name as written, without what leads up to it."""
-    known = alloys.find(name) or alloys.find(re.sub(r"\s?\(?\s?X\d.*$", "", name, flags=re.IGNORECASE))
+    spelled = name
+    for family, meant in FAMILY_NUMBERS:
+        spelled = family.sub(meant, spelled)
+    bare = re.sub(r"\s?\(?\s?X\d.*$", "", name, flags=re.IGNORECASE)
+    known = alloys.find(name) or alloys.find(spelled) or alloys.find(bare)
     if known:
         return known.id
     plain = re.sub(

@@ -18,7 +18,7 @@ GROUP = re.compile(r"\d{1,3}(?:,\d{3})+(?:\.\d+)?")
 SIZE_UNIT = re.compile(r"\s?(?:mm|lbs?|pcs|m|ft)\b", re.IGNORECASE)
 BARE_STEEL = re.compile(r"\d\.\d{4}")
 STEEL_GROUPS = re.compile(r"1\.4|2\.4|1\.0313|1\.1260|3\.70")
-MEASURED = re.compile(r"\s?(?:mm\b|um\b|in\b|inch|\"|thou|x\s?\d)", re.IGNORECASE)
+MEASURED = re.compile(r"\s?(?:[muc]m\b|in\b|inch|\"|thou|x\s?\d|per\b|je\b|/\s?(?:cm|in)|mesh|%|kg)", re.IGNORECASE)
 INCH_PARTS = (2, 4, 8, 16, 32, 64)
 NUMBER = re.compile(
     r"""(?:(?P<mixed>\d{1,2}(?:[ ]|-)\d{1,2}/(?:2|4|8|16|32|64)(?![\d.,]\d|\d))
