@@ -24,7 +24,7 @@ def by_edition(aperture_mm: Fraction, edition: str) -> Allowance:
     Shape: scalar. Source: the edition's formula (see physics.sieving). Valid 0.02–125 mm.
     """
     y_um = average_tolerance_um(float(aperture_mm * 1000), edition)
-    return Allowance(Fraction(y_um).limit_denominator(10**6) / 1000, f"Y of {edition}, test-sieve cloth")
+    return Allowance(Fraction(round(y_um * 1e6), 10**9), f"Y of {edition}, test-sieve cloth")
 
 
 def by_percent(aperture_mm: Fraction, percent: Fraction) -> Allowance:

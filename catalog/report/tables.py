@@ -10,6 +10,7 @@ from catalog.search.reader import Filters, Reader
 if TYPE_CHECKING:
     from catalog.search.lookalikes import Pair
 
+EQUIVALENTS_SOURCE = "computed from this store; alloys left aside"
 Row = dict[str, Any]
 
 
@@ -91,7 +92,7 @@ REFERENCE: Mapping[str, Callable[[], Table]] = {
 
 def equivalent_table(reader: Reader) -> Table:
     """The catalogue inch against metric, by aperture, with differences and verdict."""
-    return Table("equivalents", "computed from this store; alloys left aside", list(equivalent_rows(reader)))
+    return Table("equivalents", EQUIVALENTS_SOURCE, list(equivalent_rows(reader)))
 
 
 def equivalent_rows(reader: Reader) -> Iterator[Row]:

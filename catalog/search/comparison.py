@@ -2,7 +2,7 @@
 
 from dataclasses import dataclass, replace
 from fractions import Fraction
-from functools import lru_cache
+from typing import NamedTuple
 
 from catalog.callout.reading import Side
 from catalog.cloth import Cloth
@@ -82,7 +82,6 @@ class Comparison:
 Pair = tuple[Fraction | None, Fraction | None]
 
 
-@lru_cache(maxsize=4096)
 def _open(warp: Pair, weft: Pair) -> Fraction | None:
     """Open share of (aperture, pitch) both ways."""
     if warp[0] is None or warp[1] is None or weft[0] is None or weft[1] is None:
@@ -104,7 +103,6 @@ class _Asked:
     wire_rounding: Fraction
 
 
-@lru_cache(maxsize=32)
 def _asked(side: Side, tolerance: float | None, rules: HouseRules) -> _Asked:
     aperture = side.aperture.mm if side.aperture else None
     wire = side.wire.mm if side.wire else None
@@ -114,10 +112,38 @@ def _asked(side: Side, tolerance: float | None, rules: HouseRules) -> _Asked:
         wire,
         pitch,
         wire**2 / pitch if wire is not None and pitch else None,
-        None if tolerance is None else Fraction(tolerance).limit_denominator(10**9),
+        None if tolerance is None else Fraction(round(tolerance * 1e9), 10**9),
         min(_rounding(side, "aperture"), (aperture or ZERO) * rules.same_aperture),
         min(_rounding(side, "wire"), (wire or ZERO) * rules.same_wire),
     )
+
+
+class _Sides(NamedTuple):
+    """What a target asks, worked out once for all the cloths that are set against it."""
+
+    target: Target
+    rules: HouseRules
+    warp: _Asked
+    weft: _Asked
+    alike: bool
+    open_share: Fraction | None
+
+
+_newest: list[_Sides] = []
+"""The sides of the newest target: a pool is judged target by target. Only ever replaced whole."""
+
+
+def _asked_of(target: Target, rules: HouseRules) -> _Sides:
+    known = _newest[-1] if _newest else None
+    if known is not None and known.target is target and known.rules is rules:
+        return known
+    allowed = target.tolerance
+    warp = _asked(target.warp, allowed.warp_mm if allowed else None, rules)
+    weft = _asked(target.weft, allowed.weft_mm if allowed else None, rules)
+    open_share = _open((warp.aperture, warp.pitch), (weft.aperture, weft.pitch))
+    sides = _Sides(target, rules, warp, weft, warp == weft, open_share)
+    _newest[:] = [sides]
+    return sides
 
 
 def _direction(name: str, asked: _Asked, found: Wires) -> Direction:
@@ -140,16 +166,12 @@ def _direction(name: str, asked: _Asked, found: Wires) -> Direction:
 def compare(target: Target, cloth: Cloth, turned: bool, rules: HouseRules) -> Comparison:
     """Set *cloth* against *target*, warp to warp, or warp to weft where it is offered *turned*."""
     made = cloth.construction.turned() if turned else cloth.construction
-    allowed = target.tolerance
-    sides = (
-        _asked(target.warp, allowed.warp_mm if allowed else None, rules),
-        _asked(target.weft, allowed.weft_mm if allowed else None, rules),
-    )
-    warp = _direction("warp", sides[0], made.warp)
-    alike = sides[0] == sides[1] and made.warp == made.weft
-    weft = replace(warp, name="weft") if alike else _direction("weft", sides[1], made.weft)
+    sides = _asked_of(target, rules)
+    warp = _direction("warp", sides.warp, made.warp)
+    alike = sides.alike and made.warp == made.weft
+    weft = replace(warp, name="weft") if alike else _direction("weft", sides.weft, made.weft)
     sections = [d.section for d in (warp, weft) if d.section is not None]
-    asked_open = _open((warp.asked_aperture, warp.asked_pitch), (weft.asked_aperture, weft.asked_pitch))
+    asked_open = sides.open_share
     found_open = _open((made.warp.aperture_mm, made.warp.pitch_mm), (made.weft.aperture_mm, made.weft.pitch_mm)) or ZERO
     points = None if asked_open is None else (found_open - asked_open) * 100
     section = min(sections) if sections else None

@@ -1,9 +1,10 @@
 """The catalogue inch against metric: for each cloth of one system, the nearest of the other, by aperture."""
 
 from bisect import bisect_left
-from collections.abc import Iterable, Iterator, Sequence
+from collections.abc import Iterable, Iterator
 from dataclasses import dataclass
 from math import log
+from typing import NamedTuple
 
 from catalog.aiming import aim
 from catalog.callout.reading import Reading, Side
@@ -40,30 +41,37 @@ def reading_of(cloth: Cloth) -> Reading:
 
 def equivalents(cloths: Iterable[Cloth]) -> Iterator[Equivalent]:
     """Pair square cloth of the inch and the metric system, fine to coarse. Alloys are left aside: any will do."""
-    square = [c for c in cloths if c.construction.is_square]
-    inch = sorted((c for c in square if c.unit_system == "inch"), key=_key)
-    metric = sorted((c for c in square if c.unit_system == "metric"), key=_key)
+    square = [_placed(c) for c in cloths if c.construction.is_square]
+    inch = sorted((p for p in square if p.cloth.unit_system == "inch"), key=_by_aperture)
+    metric = sorted((p for p in square if p.cloth.unit_system == "metric"), key=_by_aperture)
     if not metric:
         return
-    keys = [_key(c)[0] for c in metric]
-    for cloth in inch:
-        yield _paired(cloth, _nearest(cloth, metric, bisect_left(keys, _key(cloth)[0])))
+    keys = [p.ln_aperture for p in metric]
+    for place in inch:
+        at = bisect_left(keys, place.ln_aperture)
+        near = metric[max(0, at - NEIGHBOURS) : at + NEIGHBOURS]
+        yield _paired(place.cloth, min(near, key=lambda other: (_distance(place, other), other.cloth.id)).cloth)
 
 
-def _key(cloth: Cloth) -> tuple[float, str]:
-    return (cloth.figures.warp_aperture_mm or 0.0, cloth.id)
+class _Place(NamedTuple):
+    cloth: Cloth
+    ln_aperture: float
+    ln_wire: float
+    ln_open_area: float
 
 
-def _nearest(cloth: Cloth, metric: Sequence[Cloth], at: int) -> Cloth:
-    near = metric[max(0, at - NEIGHBOURS) : at + NEIGHBOURS]
-    return min(near, key=lambda other: (_distance(cloth, other), other.id))
+def _placed(cloth: Cloth) -> _Place:
+    wire = float(cloth.construction.warp.wire_mm)
+    return _Place(cloth, log(cloth.figures.warp_aperture_mm or 1), log(wire), log(cloth.figures.open_area_pct or 1))
 
 
-def _distance(one: Cloth, other: Cloth) -> float:
+def _by_aperture(place: _Place) -> tuple[float, str]:
+    return (place.ln_aperture, place.cloth.id)
+
+
+def _distance(one: _Place, other: _Place) -> float:
     """The distance of the search for square cloth: 4 Δln(w)² + 2 Δln(d)² + Δln(A)²."""
-    w = log((other.figures.warp_aperture_mm or 1) / (one.figures.warp_aperture_mm or 1))
-    d = log(float(other.construction.warp.wire_mm / one.construction.warp.wire_mm))
-    a = log((other.figures.open_area_pct or 1) / (one.figures.open_area_pct or 1))
+    w, d, a = other.ln_aperture - one.ln_aperture, other.ln_wire - one.ln_wire, other.ln_open_area - one.ln_open_area
     return 4 * w * w + 2 * d * d + a * a
 
 

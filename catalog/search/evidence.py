@@ -42,6 +42,12 @@ class Evidence:
         return all(value is None for value in (*self.measured.values(), self.magnetic, self.weave))
 
     @property
+    def is_one_way(self) -> bool:
+        """True where warp or weft alone was measured."""
+        sides = [[self.count, self.wire, self.aperture], [self.count_weft, self.wire_weft, self.aperture_weft]]
+        return any(side == [None, None, None] for side in sides) and sides[0] != sides[1]
+
+    @property
     def measured(self) -> Mapping[str, Count | Scalar | None]:
         """Quantity → what was measured of it."""
         return {
@@ -102,14 +108,22 @@ class Stand:
 
     @property
     def worst(self) -> str | None:
-        """The quantity that speaks most against the cloth; None where nothing was measured of it."""
-        ranked = sorted(self.fits.items(), key=lambda item: (item[1].drop, item[1].misfit or 0.0), reverse=True)
+        """The quantity that speaks most against the cloth; None where nothing was measured of it.
+
+        Of figures that rule it out, the one off by the most; else the one that costs the most odds.
+        """
+        ranked = sorted(self.fits.items(), key=lambda item: _against(item[1]), reverse=True)
         return ranked[0][0] if ranked else None
 
     @property
     def roughness(self) -> float:
         """Sum of the squared misfits: the order among cloths that are ruled out. inf where one has no number."""
         return sum(inf if fit.misfit is None and fit.is_out else (fit.misfit or 0.0) ** 2 for fit in self.fits.values())
+
+
+def _against(fit: Fit) -> tuple[bool, float, float]:
+    misfit = inf if fit.misfit is None and fit.is_out else fit.misfit or 0.0
+    return (True, misfit, fit.drop) if fit.is_out else (False, fit.drop, misfit)
 
 
 def stand(cloth: Cloth, evidence: Evidence) -> Stand:

@@ -121,13 +121,17 @@ def _notes(evidence: Evidence, looked_at: int) -> tuple[str, ...]:
         said.append(f"Only {evidence.weave.words} cloth was looked at.")
     if evidence.made_within_pct == 0:
         said.append("Nominal pitch and wire are taken as exact; a roll made off them wants a stated spread.")
+    if evidence.is_one_way and looked_at:
+        said.append("One direction was measured: each cloth was tried both ways round, its other direction left open.")
     for name, measured in evidence.measured.items():
         if getattr(measured, "is_assumed", False):
-            said.append(f"{name.replace('_', ' ')}: ± is the house's usual figure for {_tool(measured)}.")
+            said.append(f"± of the {name.replace('_', ' ')} is assumed: the usual figure for {_tool(measured)}.")
         said.extend(getattr(measured, "notes", ()))
     return tuple(said)
 
 
 def _tool(measured: object) -> str:
     name = str(getattr(measured, "instrument", ""))
-    return "a balance and a hand-cut swatch" if name == "balance" else f"a measurement by {name}"
+    if name == "balance":
+        return "a balance and a hand-cut swatch"
+    return f"measuring by {name}, or half the last written digit where that is more"

@@ -63,6 +63,11 @@ def by_spoken_name(cloths: Iterable[Cloth]) -> Iterator[Spoken]:
             yield Spoken(str(count), tuple(sorted(groups[count], key=_by_aperture)))
 
 
+def called(count: int, cloths: Iterable[Cloth]) -> list[Cloth]:
+    """Every square cloth that goes by *count*, the finest opening first."""
+    return sorted((c for c in cloths if spoken_count(c) == count), key=_by_aperture)
+
+
 def _by_aperture(cloth: Cloth) -> tuple[float, str]:
     return (cloth.figures.warp_aperture_mm or 0.0, cloth.id)
 

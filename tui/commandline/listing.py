@@ -40,6 +40,7 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     parser.add_argument("--max-mass", type=float, metavar="KG_M2")
     parser.add_argument("--alloy", metavar="NAME", help="an alloy, a family ('stainless'), several with commas")
     parser.add_argument("--weave", metavar="WEAVE")
+    parser.add_argument("--called", metavar="COUNT", type=int, help="everything that goes by a spoken name: 60")
     parser.add_argument("--in-stock", action="store_true")
     parser.add_argument("--sort", choices=SORTS, default="aperture")
     parser.add_argument("--limit", type=int, metavar="N", help="how many to list (default: all)")
@@ -51,6 +52,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     from catalog.search.limit_report import filters_of, limit_report
 
     limits, scope = limits_of(arguments), scope_of(arguments)
+    if arguments.called is not None:
+        return _called(arguments.called, scope, setting)
     with setting.open() as store:
         filters = filters_of(limits, scope)
         total = store.count(filters)
@@ -63,6 +66,28 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
         setting.write_json(list_document(total, cloths, report, lots))
     else:
         setting.write(list_lines(total, cloths, report, lots, setting.units))
+    return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
+
+
+def _called(count: int, scope: "Filters", setting: Setting) -> ExitCode:
+    """Everything sold under one spoken count, finest opening first, and how far apart the openings lie."""
+    from catalog.search.lookalikes import called
+
+    with setting.open() as store:
+        cloths = called(count, store.select(scope))
+        lots = store.lots([c.id for c in cloths])
+    if setting.json:
+        from catalog.report.documents import list_document
+
+        setting.write_json(list_document(len(cloths), cloths, None, lots))
+        return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
+    setting.write(cloth_line(cloth, len(lots.get(cloth.id, ())), setting.units) for cloth in cloths)
+    apertures = sorted(c.figures.warp_aperture_mm or 0 for c in cloths)
+    if apertures:
+        apart = (apertures[-1] / apertures[0] - 1) * 100
+        setting.write([f"{len(cloths)} cloths go by {count}: the widest opening is {apart:.0f} % over the narrowest."])
+    else:
+        setting.write([f"Nothing here goes by {count}."])
     return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
 
 

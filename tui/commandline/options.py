@@ -50,6 +50,18 @@ class Setting:
                 text = text.encode("ascii", "replace").decode("ascii")
             sys.stdout.write(text.encode(encoding, "replace").decode(encoding) + "\n")
 
+    def write_json_rows(self, head: dict[str, Any], rows: Iterable[dict[str, Any]]) -> None:
+        """Write a document whose last key, 'rows', is streamed: a row a line, however many."""
+        import json
+
+        opening = json.dumps(head, ensure_ascii=self.ascii)[:-1]
+        sys.stdout.write(f'{opening}, "rows": [')
+        separator = "\n"
+        for row in rows:
+            sys.stdout.write(separator + json.dumps(row, ensure_ascii=self.ascii, allow_nan=False))
+            separator = ",\n"
+        sys.stdout.write("\n]}\n")
+
     def write_json(self, document: dict[str, Any], indent: int | None = 2) -> None:
         """Write one JSON document; *indent* None puts it on one line."""
         import json

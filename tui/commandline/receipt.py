@@ -68,11 +68,13 @@ def _receipt(reading: "Reading", evidence: "Evidence", tolerance: str | None) ->
 
 
 def verdict_of(understanding: "Understanding", receipts: "Sequence[Receipt]") -> "Outcome":
-    """One verdict: of alternatives that will all do, the best; of open readings, what they agree on."""
+    """One verdict: of alternatives that will all do, the best; of open readings, what every one agrees on."""
     from catalog.callout.reading import Status
+    from catalog.crossref import readings_to_match
     from catalog.search.outcome import Outcome
 
     said = {receipt.outcome for receipt in receipts}
     if understanding.status is not Status.ASK:
         return min(said, key=list(Outcome).index)
-    return said.pop() if len(said) == 1 else Outcome.NOT_PROVEN
+    every_one = len(receipts) == len(readings_to_match(understanding))
+    return said.pop() if len(said) == 1 and every_one else Outcome.NOT_PROVEN

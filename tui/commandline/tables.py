@@ -1,6 +1,7 @@
 """`tables`: the reference tables, each with its source."""
 
 import argparse
+from collections.abc import Iterable, Iterator
 from typing import Any
 
 from catalog.errors import NotFoundError
@@ -24,6 +25,8 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     name = arguments.name
     if name in tables.REFERENCE:
         table = tables.REFERENCE[name]()
+    elif name == "equivalents":
+        return _stream(setting)
     elif name in tables.OVER_STORE:
         with setting.open() as store:
             table = tables.OVER_STORE[name](store)
@@ -34,6 +37,29 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     else:
         setting.write(text_table(table))
     return ExitCode.DONE
+
+
+def _stream(setting: Setting) -> ExitCode:
+    """The equivalents row by row: a catalogue of any size begins to answer at once it is read."""
+    from catalog.report.tables import EQUIVALENTS_SOURCE, equivalent_rows
+
+    with setting.open() as store:
+        rows = equivalent_rows(store)
+        if setting.json:
+            setting.write_json_rows({"schema": 1, "name": "equivalents", "source": EQUIVALENTS_SOURCE}, rows)
+        else:
+            setting.write(_equivalent_lines(rows))
+            setting.write(["", f"Source: {EQUIVALENTS_SOURCE}"])
+    return ExitCode.DONE
+
+
+def _equivalent_lines(rows: Iterable[dict[str, Any]]) -> Iterator[str]:
+    yield "aperture mm  inch            metric          aperture   wire     open area  verdict"
+    for row in rows:
+        yield (
+            f"{row['aperture_mm']:<11.5g}  {row['inch']:<14}  {row['metric']:<14}  {row['aperture_pct']:+7.2f} %"
+            f"  {row['wire_pct']:+7.1f} %  {row['open_area_points']:+6.1f} pts  {row['verdict']}"
+        )
 
 
 def text_table(table: Any) -> list[str]:
