@@ -22,6 +22,7 @@ def passes(cloth: Cloth, lots: Sequence[Lot], filters: Filters) -> bool:
         and (not filters.weaves or make.weave in filters.weaves)
         and filters.is_filter in (None, make.is_filter)
         and within(cloth, filters.ranges)
+        and (filters.source is None or filters.source.lower() in cloth.source.lower())
         and _stock_suffices(lots, filters)
     )
 

@@ -24,7 +24,11 @@ SORTS: Mapping[str, tuple[str, ...]] = {
 class ListReader:
     """Answers by looking at every cloth."""
 
-    def __init__(self, cloths: Iterable[Cloth], lots: Iterable[Lot] = ()) -> None:
+    def __init__(
+        self, cloths: Iterable[Cloth], lots: Iterable[Lot] = (), prices: Mapping[str, int] | None = None
+    ) -> None:
+        """*prices*: cloth id → least price per m² that anybody asks, in the smallest unit."""
+        self._prices = prices or {}
         self._cloths = {cloth.id: cloth for cloth in cloths}
         self._lots: dict[str, list[Lot]] = defaultdict(list)
         for lot in sorted(lots, key=lambda lot: (lot.location, lot.id)):
@@ -58,7 +62,15 @@ class ListReader:
         return {cid: lots for cid, lots in found.items() if lots}
 
     def _passing(self, filters: Filters) -> Iterable[Cloth]:
-        return (c for c in self._cloths.values() if passes(c, self._lots.get(c.id, ()), filters))
+        return (
+            c
+            for c in self._cloths.values()
+            if passes(c, self._lots.get(c.id, ()), filters) and self._is_cheap_enough(c, filters)
+        )
+
+    def _is_cheap_enough(self, cloth: Cloth, filters: Filters) -> bool:
+        most, price = filters.most_price_minor_per_m2, self._prices.get(cloth.id)
+        return most is None or (price is not None and price <= most)
 
     def _ranked(self, point: Point, cloths: Iterable[Cloth]) -> list[Found]:
         yardstick = Yardstick(point)

@@ -48,6 +48,10 @@ class Filters:
     """In stock in a lot with so much usable width."""
     least_area_m2: float | None = None
     """In stock in lots with so much free area in all."""
+    source: str | None = None
+    """Comes from a source whose words hold these, capitals aside."""
+    most_price_minor_per_m2: int | None = None
+    """Offered by somebody at no more than this, in the smallest unit of the offer's currency."""
 
 
 class Reader(Protocol):

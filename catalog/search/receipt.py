@@ -12,15 +12,18 @@ from catalog.search.improving import Better, improvement
 from catalog.search.make_findings import make_findings
 from catalog.search.outcome import Outcome, worst
 from catalog.search.reader import Range
-from catalog.search.receipt_words import missing_words, notes_of, nothing_to_judge, sentence
+from catalog.search.receipt_words import is_square, missing_words, notes_of, nothing_to_judge, sentence
 from catalog.search.rules import HOUSE_RULES, HouseRules
 from catalog.target import Target
+from catalog.units import MM_PER_INCH
 
 EDGE = 1e-12
+COUNT = "count_per_in"
 LIMITED: Mapping[str, str] = {
     "aperture_mm": "aperture",
     "wire_mm": "wire",
     "pitch_mm": "pitch",
+    COUNT: "pitch",
     "open_area_pct": "open_area",
     "mass_kg_m2": "mass",
     "thickness_mm": "thickness",
@@ -77,26 +80,45 @@ def check_receipt(target: Target, evidence: Evidence, rules: HouseRules = HOUSE_
     if not checks and not any(finding.ok is False for finding in findings):
         raise InputError(nothing_to_judge(target, figures))
     outcome = worst([check.outcome for check in checks] + [Outcome.FAILS for f in findings if f.ok is False])
-    missing = missing_words(target, {check.figure.quantity for check in checks})
-    if missing and outcome is Outcome.CONFORMS and not _is_square(target):
+    judged_names = {check.figure.quantity for check in checks}
+    unmeasured = [limit for limit in _stated_limits(target) if not judged_names.intersection(_figures_of(limit))]
+    missing = missing_words(target, judged_names, [LIMITED.get(limit, limit) for limit in unmeasured])
+    if outcome is Outcome.CONFORMS and (unmeasured or not _are_apertures_judged(target, judged_names)):
         outcome = Outcome.NOT_PROVEN
     return Receipt(target, evidence, outcome, checks, findings, (*missing, *notes_of(evidence)))
 
 
-def _is_square(target: Target) -> bool:
-    """True where both directions are asked alike, so that one may stand for the other, with a note."""
-    warp, weft = target.warp, target.weft
-    return warp.aperture is None or weft.aperture is None or warp.aperture.mm == weft.aperture.mm
+def _are_apertures_judged(target: Target, judged_names: set[str]) -> bool:
+    """True where every aperture that was asked for was judged; in square cloth one direction stands for both."""
+    asked = {f"{name}.aperture" for name, side in (("warp", target.warp), ("weft", target.weft)) if side.aperture}
+    if is_square(target):
+        return not asked or bool(asked & judged_names)
+    return asked <= judged_names
+
+
+def _stated_limits(target: Target) -> list[str]:
+    return [limit for limit, bounds in target.limits.items() if bounds != (None, None)]
+
+
+def _figures_of(limit: str) -> tuple[str, ...]:
+    quantity = LIMITED.get(limit, "")
+    return quantity, f"warp.{quantity}", f"weft.{quantity}"
 
 
 def _checks(target: Target, figures: Mapping[str, BenchFigure], rules: HouseRules) -> Iterator[Check]:
     for name, side in (("warp", target.warp), ("weft", target.weft)):
         yield from _side_checks(name, side, target, figures, rules)
-    for limit, bounds in target.limits.items():
-        quantity = LIMITED.get(limit, "")
-        for key in (quantity, f"warp.{quantity}", f"weft.{quantity}"):
-            if key in figures and bounds != (None, None):
-                yield judged(figures[key], None, bounds, "limit as stated")
+    for limit in _stated_limits(target):
+        bounds = target.limits[limit]
+        for key in _figures_of(limit):
+            if key in figures:
+                yield judged(figures[key], None, as_pitch(bounds) if limit == COUNT else bounds, "limit as stated")
+
+
+def as_pitch(count_per_in: Range) -> Range:
+    """Bounds on a count as bounds on the pitch, mm: p = 25.4/N, so least and most change places."""
+    least, most = (None if count is None else float(MM_PER_INCH) / count for count in count_per_in)
+    return most, least
 
 
 def _side_checks(

@@ -82,13 +82,21 @@ def name_of(quantity: str) -> str:
     return quantity.replace(".", " ").replace("_", " ").capitalize()
 
 
-def missing_words(target: Target, judged: Collection[str]) -> tuple[str, ...]:
-    """What was asked and not measured."""
-    return tuple(
-        f"The {side} aperture wasn't measured."
-        for side, asked in (("warp", target.warp), ("weft", target.weft))
-        if asked.aperture is not None and f"{side}.aperture" not in judged
-    )
+def is_square(target: Target) -> bool:
+    """True where both directions are asked alike, so that one may stand for the other, with a note."""
+    warp, weft = target.warp, target.weft
+    return warp.aperture is None or weft.aperture is None or warp.aperture.mm == weft.aperture.mm
+
+
+def missing_words(target: Target, judged: Collection[str], limits: Collection[str]) -> tuple[str, ...]:
+    """What was asked and not measured; *limits* are the quantities of limits that weren't."""
+    sides = [name for name, side in (("warp", target.warp), ("weft", target.weft)) if side.aperture is not None]
+    measured = [name for name in sides if f"{name}.aperture" in judged]
+    stands_in = f": assumed to be like the {measured[0]} aperture" if measured and is_square(target) else ""
+    said = [f"The {name} aperture wasn't measured{stands_in}." for name in sides if name not in measured]
+    if any(side.wire for side in (target.warp, target.weft)) and not {"warp.wire", "weft.wire"} & {*judged}:
+        said.append("The wire wasn't measured: the verdict is about the rest.")
+    return (*said, *(f"The limit on {name.replace('_', ' ')} can't be judged: it wasn't measured." for name in limits))
 
 
 def notes_of(evidence: Evidence) -> tuple[str, ...]:

@@ -68,6 +68,7 @@ def add_filters(conditions: Conditions, filters: Filters, weaves: frozenset[Weav
     add_kinds(conditions, filters, weaves)
     conditions.add(conditions.within(filters.ranges))
     conditions.add(_stock(conditions, filters))
+    conditions.add(_trade(conditions, filters))
 
 
 def add_kinds(conditions: Conditions, filters: Filters, weaves: frozenset[Weave]) -> None:
@@ -88,6 +89,18 @@ def _stock(conditions: Conditions, filters: Filters) -> str:
         return f"EXISTS ({wide.format(what='1')})"
     area = "SUM((l.width_mm - 2 * l.selvedge_mm) * (l.length_mm - l.reserved_mm))"
     return f"({wide.format(what=area)}) >= {conditions.bind(filters.least_area_m2 * 1e6)}"
+
+
+def _trade(conditions: Conditions, filters: Filters) -> str:
+    """Source and price. A source's words are compared with capitals aside, signs taken as they are."""
+    parts = []
+    if filters.source is not None:
+        words = re.sub(r"([!%_])", r"!\1", filters.source.lower())
+        parts.append(f"LOWER(c.source) LIKE {conditions.bind(f'%{words}%')} ESCAPE '!'")
+    if filters.most_price_minor_per_m2 is not None:
+        price = conditions.bind(filters.most_price_minor_per_m2)
+        parts.append(f"EXISTS (SELECT 1 FROM article a WHERE a.cloth = c.id AND a.price_minor_per_m2 <= {price})")
+    return " AND ".join(parts)
 
 
 def _column(name: str) -> str:

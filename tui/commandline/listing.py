@@ -2,7 +2,7 @@
 
 import argparse
 import re
-from collections.abc import Iterator, Mapping, Sequence
+from collections.abc import Callable, Iterator, Mapping, Sequence
 from typing import TYPE_CHECKING, Any
 
 from catalog.errors import InputError
@@ -40,6 +40,10 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     parser.add_argument("--max-mass", type=float, metavar="KG_M2")
     parser.add_argument("--alloy", metavar="NAME", help="an alloy, a family ('stainless'), several with commas")
     parser.add_argument("--weave", metavar="WEAVE")
+    parser.add_argument("--max-price", metavar="PER_M2", help="offered at no more, in the offer's currency: 24.50")
+    parser.add_argument("--source", metavar="WORDS", help="comes from a source with these words")
+    parser.add_argument("--max-loss", metavar="K", type=float, help="loss coefficient of at most K, with --flow")
+    parser.add_argument("--flow", metavar="TEXT", help="fluid and face velocity: 'air 20 C 2 m/s'")
     parser.add_argument("--called", metavar="COUNT", type=int, help="everything that goes by a spoken name: 60")
     parser.add_argument("--in-stock", action="store_true")
     parser.add_argument("--sort", choices=SORTS, default="aperture")
@@ -56,8 +60,12 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
         return _called(arguments.called, scope, setting)
     with setting.open() as store:
         filters = filters_of(limits, scope)
-        total = store.count(filters)
-        cloths = store.select(filters, arguments.sort, arguments.limit)
+        passes = loss_test(arguments)
+        if passes is None:
+            total, cloths = store.count(filters), store.select(filters, arguments.sort, arguments.limit)
+        else:
+            every = [c for c in store.select(filters, arguments.sort) if passes(c)]
+            total, cloths = len(every), every[: arguments.limit]
         report = limit_report(limits, scope, store) if limits or scope != type(scope)() else None
         lots = store.lots([c.id for c in cloths])
     if setting.json:
@@ -136,7 +144,37 @@ def scope_of(arguments: argparse.Namespace) -> "Filters":
         alloys=alloys_of(arguments.alloy) if arguments.alloy else frozenset(),
         weaves=frozenset([weave]) if weave else frozenset(),
         in_stock=arguments.in_stock,
+        source=arguments.source,
+        most_price_minor_per_m2=_minor(arguments.max_price),
     )
+
+
+def _minor(price: str | None) -> int | None:
+    """A price in the smallest unit, exact. Raises InputError."""
+    if price is None:
+        return None
+    from decimal import Decimal, InvalidOperation
+
+    try:
+        amount = Decimal(price.replace(",", "."))
+    except InvalidOperation:
+        raise InputError(f"--max-price takes an amount like 24.50, not {price!r}.") from None
+    if not 0 < amount < 10**7:
+        raise InputError(f"--max-price {price} can't be: state more than 0.")
+    return int(amount * 100)
+
+
+def loss_test(arguments: argparse.Namespace) -> "Callable[[Cloth], bool] | None":
+    """The test on the loss coefficient that the options state. Raises InputError."""
+    if arguments.max_loss is None:
+        return None
+    from catalog.search.nearest_where import loses_at_most
+    from tui.commandline.match import duty_of
+
+    duty = duty_of(arguments.flow)
+    if duty is None:
+        raise InputError("--max-loss needs --flow: a loss coefficient depends on fluid and velocity.")
+    return loses_at_most(_sensible(arguments.max_loss, "a loss coefficient", 1e9), duty)
 
 
 def alloys_of(text: str) -> frozenset[str]:
