@@ -18,6 +18,8 @@ from tui.presenting import UNITS, harmless
 from tui.screens.desk import Desk
 from tui.widgets.inks import ink_table
 
+COLLECTING_FROM_S = 3.0
+
 
 def _theme(name: str, is_dark: bool) -> Theme:
     ink = ink_table(is_dark)
@@ -35,6 +37,12 @@ def _theme(name: str, is_dark: bool) -> Theme:
         panel=ink["panel"],
         dark=is_dark,
     )
+
+
+def _collect() -> None:
+    """Collect garbage from now on; what the start has made stays anyway and need not be looked through."""
+    gc.freeze()
+    gc.enable()
 
 
 class CrossclothApp(App[None]):
@@ -62,7 +70,7 @@ class CrossclothApp(App[None]):
         self.desk = Desk(
             opener, self.memory, units if units in UNITS else remembered, ascii_only, keys or {}, directory
         )
-        self.keyboard = Keyboard(self, super().on_event)
+        self.keyboard = Keyboard(self, self.desk, super().on_event)
         self._dress(ascii_only)
 
     def _dress(self, ascii_only: bool) -> None:
@@ -96,7 +104,7 @@ class CrossclothApp(App[None]):
         """Leave a clean terminal when told to end."""
         if not self.is_headless:
             self._mind_signals()
-        self.call_after_refresh(gc.enable)
+        self.set_timer(COLLECTING_FROM_S, _collect)
 
     def _mind_signals(self) -> None:
         import asyncio

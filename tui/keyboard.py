@@ -7,14 +7,11 @@ on its way (typed text that is being read, an answer, a dialogue that opens) wai
 
 from collections import deque
 from collections.abc import Awaitable, Callable
-from typing import TYPE_CHECKING, Protocol
+from typing import Any, Protocol
 
+from textual.app import App
 from textual.events import Event, Key
 from textual.message import Message
-from textual.screen import Screen
-
-if TYPE_CHECKING:
-    from tui.app import CrossclothApp
 
 Forward = Callable[[Event], Awaitable[None]]
 ALT = "alt+"
@@ -27,6 +24,23 @@ class Dialogue(Protocol):
     """True once keys can be typed into it."""
 
 
+class Desk(Protocol):
+    """The screen on which keys set off commands."""
+
+    @property
+    def is_typing(self) -> bool:
+        """True while keys go into a line."""
+        ...
+
+    def must_wait(self, key: str) -> bool:
+        """True where what the key is about is still on its way."""
+        ...
+
+    async def obey(self, key: str) -> bool:
+        """Do what a key sets off; False where it sets off nothing."""
+        ...
+
+
 class Settled(Message):
     """Something that keys were waiting for has come about."""
 
@@ -34,8 +48,8 @@ class Settled(Message):
 class Keyboard:
     """Holds keys that have to wait, and hands on the others."""
 
-    def __init__(self, app: "CrossclothApp", forward: Forward) -> None:
-        self._app, self._forward = app, forward
+    def __init__(self, app: App[Any], desk: Desk, forward: Forward) -> None:
+        self._app, self._desk, self._forward = app, desk, forward
         self._held: deque[Key] = deque()
         self.is_submitting = False
         """True from the Enter that ends a line until the place has read the line."""
@@ -62,8 +76,8 @@ class Keyboard:
             await self._take(self._held.popleft())
 
     def _must_wait(self, event: Key) -> bool:
-        screen: Screen[object] = self._app.screen
-        desk = self._app.desk
+        screen: Any = self._app.screen
+        desk = self._desk
         if screen is not desk:
             return not getattr(screen, "is_ready", True)
         if self.is_submitting:
@@ -71,8 +85,9 @@ class Keyboard:
         return not desk.is_typing and desk.must_wait(event.key)
 
     async def _take(self, event: Key) -> None:
-        desk = self._app.desk
-        if self._app.screen is not desk:
+        desk = self._desk
+        screen: Any = self._app.screen
+        if screen is not desk:
             await self._forward(event)
         elif desk.is_typing and event.key in ("enter", "escape"):
             # the line gets it behind the letters before it, and says when it has been read

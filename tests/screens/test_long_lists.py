@@ -29,6 +29,8 @@ class Squares:
 
 
 class Listing(App[None]):
+    CSS = "PagedTable { scrollbar-size: 0 0; overflow: hidden auto; }"
+
     def __init__(self) -> None:
         super().__init__()
         self.rows = Squares()

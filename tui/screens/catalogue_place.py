@@ -4,13 +4,13 @@ from collections.abc import Mapping, Sequence
 from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.containers import Container, Horizontal
 from textual.widgets import Input
 
 from tui.commands import CATALOGUE
 from tui.presenting import Line, fit, harmless, phrases, plain
 from tui.screens.place import Place
 from tui.screens.store_pages import StorePages
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.inks import text_of
 from tui.widgets.line_view import LineView
@@ -50,11 +50,11 @@ class CataloguePlace(Place):
 
     def compose(self) -> ComposeResult:
         """The line for limits, what is shown, the list, the highlighted cloth."""
-        with Horizontal(classes="typing"):
+        with Box(classes="typing"):
             yield LineView(lambda width: [((" Limits  ", "key"),)], classes="typing-label")
             yield LineInput(id="limits", placeholder=HINT)
         yield LineView(self._status_line, id="status", classes="status")
-        with Container(id="lower"):
+        with Box(id="lower"):
             yield PagedTable(id="candidates", sign=self.spelled("›"))
             yield LineView(self._detail_lines, id="detail", has_band=True)
 

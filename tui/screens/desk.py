@@ -4,7 +4,6 @@ from collections.abc import Callable, Mapping
 from pathlib import Path
 
 from textual.app import ComposeResult
-from textual.containers import Container
 from textual.events import Click, Resize
 from textual.screen import Screen
 from textual.widgets import Input
@@ -15,6 +14,7 @@ from tui.keyboard import Settled
 from tui.memory import Memory
 from tui.presenting import UNITS, Line, Piece, harmless, plain, wrapped
 from tui.screens.place import Place
+from tui.widgets.box import Box
 from tui.widgets.line_view import LineView
 
 WIDE_FROM = 112
@@ -77,7 +77,7 @@ class Desk(Screen[None]):
     def compose(self) -> ComposeResult:
         """The three parts."""
         yield LineView(self._places_line, id="places")
-        with Container(id="room"):
+        with Box(id="room"):
             yield _make(self.place_id)
         yield LineView(self._hints_line, id="hints")
 

@@ -4,12 +4,12 @@ from collections.abc import Callable, Sequence
 from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.containers import Container, Horizontal
 from textual.widgets import Input
 
 from tui.commands import MATCH
 from tui.presenting import SEALS, Line, fit, harmless, phrases, plain, significant
 from tui.screens.place import Place
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.inks import text_of
 from tui.widgets.line_view import LineView
@@ -48,6 +48,7 @@ class MatchPlace(Place):
         self.spots: Sequence[Spot] = ()
         self.spot: Spot | None = None
         self._asked = False
+        self._is_started = False
 
     def awaits(self) -> bool:
         """True while an answer for the list is on its way."""
@@ -55,12 +56,12 @@ class MatchPlace(Place):
 
     def compose(self) -> ComposeResult:
         """The line, the reading, the state of the search, the list and the detail."""
-        with Horizontal(classes="typing"):
+        with Box(classes="typing"):
             yield LineView(lambda width: [((" Callout ", "key"),)], classes="typing-label")
             yield LineInput(self.desk.memory.callout, id="callout")
         yield LineView(self._reading_lines, id="reading")
         yield LineView(self._status_line, id="status", classes="status")
-        with Container(id="lower"):
+        with Box(id="lower"):
             yield PagedTable(id="candidates", sign=self.spelled("›"))
             yield LineView(self._detail_lines, id="detail", has_band=True)
 
@@ -69,7 +70,12 @@ class MatchPlace(Place):
         self.say_in_list(("Opening the store…", "muted"))
         self.watch(self.input, "value", self._keep, init=False)
         self.input.select_all()  # what was typed last time stays until something else is typed
-        self.call_after_refresh(self._read)
+        self.call_after_refresh(self._start)
+
+    def _start(self) -> None:
+        """The first frame is painted: now read what was typed last time."""
+        self._is_started = True
+        self._read()
 
     @property
     def input(self) -> LineInput:
@@ -111,7 +117,7 @@ class MatchPlace(Place):
     def on_input_changed(self, event: Input.Changed) -> None:
         """Read again on each change, unless another follows already."""
         event.stop()
-        if event.value == self.input.value:
+        if self._is_started and event.value == self.input.value:
             self.taken = None
             self._read()
 
@@ -291,10 +297,10 @@ class MatchPlace(Place):
         self._list(self.candidate.cloth.id if self.candidate else None)
 
     def _reading_lines(self, width: int) -> Sequence[Line]:
-        from tui.widgets.reading_lines import reading_lines
-
         if self.understanding is None:
             return [((" ", "text"),)]
+        from tui.widgets.reading_lines import reading_lines
+
         # the line to type in begins behind its label
         label = 9
         cautions = self.answer.cautions if self.answer is not None else ()
@@ -329,11 +335,11 @@ class MatchPlace(Place):
         return f"{served} of {len(self.answer.candidates)} fit" if served else "none fits"
 
     def _detail_lines(self, width: int) -> Sequence[Line]:
-        from tui.widgets.detail_lines import view_lines, whole_lines
-
         candidate, answer = self.candidate, self.answer
         if candidate is None or answer is None:
             return []
+        from tui.widgets.detail_lines import view_lines, whole_lines
+
         if self.special:
             return self.spelled_lines(self._special_lines(answer, width))
         height = max(8, self.detail.size.height)

@@ -5,13 +5,13 @@ from typing import ClassVar
 
 from textual.app import ComposeResult
 from textual.binding import Binding, BindingType
-from textual.containers import Vertical
 from textual.screen import ModalScreen
 from textual.widgets import Input
 
 from tui.commands import EVERYWHERE, LIST, Command, at, key_words
 from tui.keyboard import Settled
 from tui.presenting import Piece, plain
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.paged_table import Column, PagedTable
 
@@ -55,7 +55,7 @@ class Palette(ModalScreen[str | None]):
 
     def compose(self) -> ComposeResult:
         """The line and the list."""
-        with Vertical(id="palette"):
+        with Box(id="palette"):
             yield LineInput(id="palette-line", placeholder="part of a command's name")
             sign = ">" if self._ascii else "›"
             yield PagedTable(id="palette-list", sign=sign, empty="No command is called that.")

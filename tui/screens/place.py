@@ -3,11 +3,11 @@
 from collections.abc import Sequence
 from typing import TYPE_CHECKING, ClassVar, cast
 
-from textual.containers import Vertical
 from textual.widget import Widget
 from textual.widgets import Input
 
 from tui.presenting import Line, plain
+from tui.widgets.box import Box
 from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import Column, PagedTable
 
@@ -16,7 +16,7 @@ if TYPE_CHECKING:
     from tui.screens.desk import Desk
 
 
-class Place(Vertical):
+class Place(Box):
     """What every place does: its list's keys, copying, coming back to where one was."""
 
     where: ClassVar[str] = ""

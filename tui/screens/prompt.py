@@ -4,12 +4,12 @@ from typing import ClassVar
 
 from textual.app import ComposeResult
 from textual.binding import Binding, BindingType
-from textual.containers import Horizontal
 from textual.screen import ModalScreen
 from textual.widgets import Input
 
 from tui.keyboard import Settled
 from tui.presenting import fit, plain
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
 
@@ -27,7 +27,7 @@ class Prompt(ModalScreen[str | None]):
 
     def compose(self) -> ComposeResult:
         """The label and the line."""
-        with Horizontal(id="prompt"):
+        with Box(id="prompt"):
             view = LineView(lambda width: [((fit(f" {self._label}: ", width), "key"),)], id="prompt-label")
             view.styles.width = len(self._label) + 3
             yield view

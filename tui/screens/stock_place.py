@@ -4,12 +4,12 @@ from collections.abc import Mapping, Sequence
 from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.containers import Horizontal
 from textual.widgets import Input
 
 from tui.commands import STOCK
 from tui.presenting import Line, Piece, fit, harmless, shortened, significant
 from tui.screens.place import Place
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import Column, PagedTable
@@ -89,7 +89,7 @@ class StockPlace(Place):
 
     def compose(self) -> ComposeResult:
         """The line for words, what is shown, the list."""
-        with Horizontal(classes="typing"):
+        with Box(classes="typing"):
             yield LineView(lambda width: [((" Words   ", "key"),)], classes="typing-label")
             yield LineInput(id="words", placeholder="part of a location, cloth, heat number, form or lot")
         yield LineView(self._status_line, id="status", classes="status")

@@ -4,12 +4,12 @@ from collections.abc import Sequence
 from typing import TYPE_CHECKING, Any
 
 from textual.app import ComposeResult
-from textual.containers import Horizontal
 from textual.widgets import Input
 
 from tui.commands import TABLES
 from tui.presenting import Line, Piece, fit, harmless, inch, significant, width_of
 from tui.screens.place import Place
+from tui.widgets.box import Box
 from tui.widgets.callout_input import LineInput
 from tui.widgets.line_view import LineView
 from tui.widgets.paged_table import Column, PagedTable
@@ -77,7 +77,7 @@ class TablesPlace(Place):
 
     def compose(self) -> ComposeResult:
         """The line for words, which table, the list, its source."""
-        with Horizontal(classes="typing"):
+        with Box(classes="typing"):
             yield LineView(lambda width: [((" Words   ", "key"),)], classes="typing-label")
             yield LineInput(id="words", placeholder="part of a row: 30, SWG, 1.4404, No. 60")
         yield LineView(self._which_line, id="status", classes="status")

@@ -56,8 +56,6 @@ class NoRows:
 class PagedTable(Inked, can_focus=True, inherit_bindings=False):
     """Rows of any number; the cursor's row carries a sign as well as a colour."""
 
-    DEFAULT_CSS = "PagedTable { overflow: hidden auto; scrollbar-size: 0 0; }"
-
     cursor = reactive(0, repaint=False)
 
     class Moved(Message):
