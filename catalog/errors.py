@@ -18,9 +18,7 @@ class InputError(CrossclothError):
     *code* is a problem code of the JSON contract; *column* counts from 1 within *text*.
     """
 
-    def __init__(
-        self, message: str, code: str = "E_NOT_UNDERSTOOD", column: int | None = None, text: str = ""
-    ) -> None:
+    def __init__(self, message: str, code: str = "E_NOT_UNDERSTOOD", column: int | None = None, text: str = "") -> None:
         super().__init__(message)
         self.code = code
         self.column = column

@@ -42,9 +42,7 @@ def fit(lot: Lot, wanted: Wanted) -> LotFit:
     if wanted.diameter_mm is not None:
         width = length = wanted.diameter_mm
     if width is None:
-        return (
-            LotFit(None, "no size asked") if wanted.certificate is None else LotFit(True, "certificate meets")
-        )
+        return LotFit(None, "no size asked") if wanted.certificate is None else LotFit(True, "certificate meets")
     if length is None:
         return _by_width(lot, width)
     return _by_pieces(lot, wanted, width, length)
