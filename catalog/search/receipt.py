@@ -12,7 +12,14 @@ from catalog.search.improving import Better, improvement
 from catalog.search.make_findings import make_findings
 from catalog.search.outcome import Outcome, worst
 from catalog.search.reader import Range
-from catalog.search.receipt_words import is_square, missing_words, notes_of, nothing_to_judge, sentence
+from catalog.search.receipt_words import (
+    is_square,
+    missing_words,
+    notes_of,
+    nothing_to_judge,
+    refuse_impossible,
+    sentence,
+)
 from catalog.search.rules import HOUSE_RULES, HouseRules
 from catalog.target import Target
 from catalog.units import MM_PER_INCH
@@ -69,11 +76,13 @@ class Receipt:
 
 
 def check_receipt(target: Target, evidence: Evidence, rules: HouseRules = HOUSE_RULES) -> Receipt:
-    """Judge *evidence* against *target*. Raises InputError where nothing that was measured can be judged.
+    """Judge *evidence* against *target*. Raises InputError where nothing can be judged, or none could be woven so.
 
     Conforms where |found − asked| + U ≤ T, fails where |found − asked| − U > T, else not proven.
     Source: guard band of width U (k = 2) on both sides of the tolerance, as in ISO 14253-1 (from memory).
     """
+    if not target.reading.is_filter:
+        refuse_impossible(evidence)
     figures = {figure.quantity: figure for figure in bench_figures(evidence)}
     checks = tuple(_checks(target, figures, rules))
     findings = tuple(make_findings(target, evidence))
@@ -83,17 +92,20 @@ def check_receipt(target: Target, evidence: Evidence, rules: HouseRules = HOUSE_
     judged_names = {check.figure.quantity for check in checks}
     unmeasured = [limit for limit in _stated_limits(target) if not judged_names.intersection(_figures_of(limit))]
     missing = missing_words(target, judged_names, [LIMITED.get(limit, limit) for limit in unmeasured])
-    if outcome is Outcome.CONFORMS and (unmeasured or not _are_apertures_judged(target, judged_names)):
+    if outcome is Outcome.CONFORMS and (unmeasured or not _is_enough(target, judged_names)):
         outcome = Outcome.NOT_PROVEN
     return Receipt(target, evidence, outcome, checks, findings, (*missing, *notes_of(evidence)))
 
 
-def _are_apertures_judged(target: Target, judged_names: set[str]) -> bool:
-    """True where every aperture that was asked for was judged; in square cloth one direction stands for both."""
+def _is_enough(target: Target, judged_names: set[str]) -> bool:
+    """True where every aperture that was asked for was judged; in square cloth one direction stands for both.
+
+    Where none was asked for, wires alone prove nothing: a limit has to be judged.
+    """
     asked = {f"{name}.aperture" for name, side in (("warp", target.warp), ("weft", target.weft)) if side.aperture}
-    if is_square(target):
-        return not asked or bool(asked & judged_names)
-    return asked <= judged_names
+    if not asked:
+        return bool(_stated_limits(target))
+    return bool(asked & judged_names) if is_square(target) else asked <= judged_names
 
 
 def _stated_limits(target: Target) -> list[str]:

@@ -2,6 +2,7 @@
 
 from collections.abc import Collection
 
+from catalog.errors import InputError
 from catalog.search.bench_figures import BenchFigure
 from catalog.search.evidence import Evidence
 from catalog.search.improving import Better
@@ -96,7 +97,20 @@ def missing_words(target: Target, judged: Collection[str], limits: Collection[st
     said = [f"The {name} aperture wasn't measured{stands_in}." for name in sides if name not in measured]
     if any(side.wire for side in (target.warp, target.weft)) and not {"warp.wire", "weft.wire"} & {*judged}:
         said.append("The wire wasn't measured: the verdict is about the rest.")
+    if not sides and not target.limits:
+        said.append("No opening and no limit was asked for: what was measured proves nothing of the whole cloth.")
     return (*said, *(f"The limit on {name.replace('_', ' ')} can't be judged: it wasn't measured." for name in limits))
+
+
+def refuse_impossible(evidence: Evidence) -> None:
+    """Raise InputError where a wire as measured leaves no opening at the pitch as counted."""
+    for count, wire in ((evidence.count, evidence.wire), (evidence.count_weft, evidence.wire_weft)):
+        if count and wire and wire.value >= count.pitch_mm:
+            raise InputError(
+                f"A wire of {float(wire.value):.4g} mm leaves no opening at a pitch of {float(count.pitch_mm):.4g} mm: "
+                "was the micrometer set on a knuckle? Unravel a wire, measure it alone, and count again.",
+                "E_IMPOSSIBLE",
+            )
 
 
 def notes_of(evidence: Evidence) -> tuple[str, ...]:

@@ -115,6 +115,20 @@ def test_a_wire_alone_does_not_prove_an_opening(crosscloth: Program) -> None:
     assert any("aperture wasn't measured" in note for note in said.json["notes"])
 
 
+def test_wires_alone_do_not_prove_filter_cloth(crosscloth: Program) -> None:
+    """24 × 110 plain Dutch, .015/.010: the wire is as ordered, and nothing says what it holds back."""
+    said = crosscloth("receipt", "24 x 110 plain dutch .015/.010", "--wire", "0.381±0.005 mm", "--json")
+    assert (said.code, said.json["verdict"]) == (1, "not-proven")
+    assert [check["verdict"] for check in said.json["checks"]] == ["conforms"]
+
+
+def test_a_wire_thicker_than_its_pitch_is_a_slip_not_a_verdict(crosscloth: Program) -> None:
+    said = crosscloth("receipt", ORDER, "--count", "47 in 20 mm", "--wire", "0.5 mm", "--json")
+    assert said.code == 2
+    assert said.json["error"]["code"] == "E_IMPOSSIBLE"
+    assert "knuckle" in said.err
+
+
 def test_a_limit_on_the_count_is_judged_by_the_pitch(crosscloth: Program) -> None:
     """At least 30 per inch is a pitch of at most 25.4/30 = 0.8467 mm; 25 per inch is 1.016 mm."""
     close, open_ = (
