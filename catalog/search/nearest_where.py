@@ -1,9 +1,10 @@
-"""The nearest cloths that pass a test no index knows, such as a loss coefficient at a stated flow: exact all the same."""
+"""The nearest cloths that pass a test no index knows, such as a loss coefficient at a stated flow; still exact."""
 
 from collections.abc import Callable, Sequence
 
 from catalog.cloth import Cloth
 from catalog.search.duty import loss_of
+from catalog.search.filtering import NO_FILTERS
 from catalog.search.reader import Filters, Point, Reader
 from catalog.target import Duty
 
@@ -13,7 +14,7 @@ FIRST_LOOK = 4
 
 
 def nearest_where(
-    reader: Reader, point: Point, k: int, passes: Callable[[Cloth], bool], filters: Filters = Filters()
+    reader: Reader, point: Point, k: int, passes: Callable[[Cloth], bool], filters: Filters = NO_FILTERS
 ) -> Sequence[Found]:
     """The *k* nearest to *point* that *passes* lets through, by distance then id.
 

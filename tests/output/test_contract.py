@@ -41,7 +41,8 @@ def test_a_match_has_the_keys_of_the_contract(crosscloth: Program) -> None:
     assert said.code == 0
     document = said.json
     assert {"schema", "text", "question", "purpose", "target", "candidates"} <= set(document)
-    assert {"tolerance_um", "tolerance_source", "origin"} | (READING - {"label", "likelihood"}) <= set(document["target"])
+    read = READING - {"label", "likelihood"}
+    assert {"tolerance_um", "tolerance_source", "origin"} | read <= set(document["target"])
     assert document["target"]["tolerance_um"] == pytest.approx(12.5)
     for candidate in document["candidates"]:
         assert set(candidate) >= CANDIDATE
