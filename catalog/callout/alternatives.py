@@ -47,6 +47,9 @@ def with_alternative(first: Understanding, other: Understanding) -> Understandin
     if not extra and not problems:
         problems = (Problem("E_NOT_UNDERSTOOD", "The alternative isn't understood.", None),)
     words = tuple(sorted((*first.words, *other.words), key=lambda w: w.start))
+    asked = first.question or other.question
+    if status is Status.ASK and asked is None and not problems:
+        asked = f"What is left open of the cloth or of its alternative: {', '.join(other.missing or first.missing)}?"
     readings = (*mains, *extra, *(r for r in first.readings if r.likelihood is Likelihood.RULED_OUT))
     return replace(
         first,
@@ -54,7 +57,7 @@ def with_alternative(first: Understanding, other: Understanding) -> Understandin
         readings=readings,
         problems=problems,
         words=words,
-        question=first.question or other.question,
+        question=asked,
     )
 
 

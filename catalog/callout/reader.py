@@ -32,6 +32,7 @@ from catalog.callout.text.tokens import tokenize
 
 LONGEST = 4000
 """Characters that are read; what comes after is no callout."""
+MOST_CLAIMS, MOST_CHOICES = 12, 6
 MOST_ITEMS = 300
 """Words, numbers and signs that are read: work and time stay in proportion to the length."""
 
@@ -72,8 +73,16 @@ def _understand(draft: Draft, repaired: Repaired, text: str) -> Understanding:
     bare_sizes(draft)
     part_numbers(draft)
     leftovers(draft)
+    _keep_to_one_cloth(draft)
     decided = decide(draft) if draft.outside is None else Decided()
     return _placed(status_of(draft, decided, text), draft, repaired)
+
+
+def _keep_to_one_cloth(draft: Draft) -> None:
+    """A cloth has few figures: a text with more holds a list, and isn't combined into every cloth that it could be."""
+    if len(draft.claims) > MOST_CLAIMS or len(draft.choices) > MOST_CHOICES:
+        draft.problem("E_NOT_UNDERSTOOD", "The text holds more figures than one cloth has.")
+        del draft.claims[MOST_CLAIMS:], draft.choices[MOST_CHOICES:]
 
 
 def _placed(understood: Understanding, draft: Draft, repaired: Repaired) -> Understanding:

@@ -44,8 +44,8 @@ class Side:
 
     @property
     def count_per_in(self) -> Fraction | None:
-        """Wires per inch, where the pitch is known."""
-        return MM_PER_INCH / self.pitch.mm if self.pitch else None
+        """Wires per inch, where the pitch is known and is one."""
+        return MM_PER_INCH / self.pitch.mm if self.pitch and self.pitch.mm > 0 else None
 
 
 @dataclass(frozen=True, slots=True)

@@ -73,7 +73,11 @@ def alloy_words(alloy: str | None) -> str:
         return ALLOY_WORDS[alloy]
     if "stainless" in known.family and known.en_numbers:
         return f"stainless {known.en_numbers[0]} ({alloy})"
-    return f"{FAMILY_WORDS[known.family]} {alloy}" if known.family in FAMILY_WORDS else known.generic_name.partition(" (")[0]
+    return (
+        f"{FAMILY_WORDS[known.family]} {alloy}"
+        if known.family in FAMILY_WORDS
+        else known.generic_name.partition(" (")[0]
+    )
 
 
 def _en_number(alloy: str | None) -> str:
@@ -147,8 +151,8 @@ def _digits(text: str) -> int:
 
 
 def _rounded(value: Fraction, digits: int) -> str:
-    """*value* to so many significant digits, with the zeros that belong to them."""
-    decimals = max(0, digits - 1 - floor(log10(abs(float(value))))) if value else digits
+    """*value* to so many significant digits, with a decimal always: a whole count would be taken as exact."""
+    decimals = max(1, digits - 1 - floor(log10(abs(float(value))))) if value else digits
     return f"{float(value):.{decimals}f}"
 
 

@@ -58,7 +58,7 @@ class Combined:
 
 def combinations(draft: Draft) -> list[Combined]:
     """Every combination of the open senses, at most 64."""
-    rows: Iterator[tuple[Option, ...]] = islice(product(*draft.choices), MOST_READINGS)
+    rows: Iterator[tuple[Option, ...]] = islice(product(*filter(None, draft.choices)), MOST_READINGS)
     return [combine(draft.claims, options, draft.is_dutch) for options in rows]
 
 

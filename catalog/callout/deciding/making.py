@@ -1,10 +1,11 @@
 """From a combination of senses to a reading."""
 
 from catalog.callout.deciding.combining import Combined
-from catalog.callout.reading import Likelihood, Reading, Side
+from catalog.callout.reading import Likelihood, Limits, Reading, Side
 from catalog.callout.rules.draft import Draft
 from catalog.construction import Weave
 from catalog.physics.geometry import open_area_pct
+from catalog.units import MM_PER_INCH
 
 
 def figures_of_side(side: Side) -> tuple[object, ...]:
@@ -40,7 +41,7 @@ def make_reading(
         rating=next((o.rating for o in options if o.rating), None) or draft.rating,
         open_area_pct=area,
         mass_kg_m2=_stated_mass(draft),
-        limits=dict(draft.limits),
+        limits=_limits(draft, made),
         form=form,
         derived=made.derived + derived,
         notes=tuple(said),
@@ -56,6 +57,19 @@ def _open_area(draft: Draft, made: Combined, weave: Weave | None) -> tuple[float
             return round(open_area_pct(*figures), 4), ("open_area_pct",)
     stated = draft.open_area
     return (float(stated.number.value) if stated and stated.number else None), ()
+
+
+def _limits(draft: Draft, made: Combined) -> Limits:
+    """The limits of the text, and those that a tolerance puts around this reading's figures."""
+    limits = dict(draft.limits)
+    for slot, (minus, plus) in draft.tolerances.items():
+        length = made.warp.pitch if slot == "count" else getattr(made.warp, slot)
+        if length is None or length.mm <= 0:
+            continue
+        value = MM_PER_INCH / length.mm if slot == "count" else length.mm
+        key = "count_per_in" if slot == "count" else f"{slot}_mm"
+        limits[key] = (round(float(value * (1 - minus)), 9), round(float(value * (1 + plus)), 9))
+    return limits
 
 
 def _stated_mass(draft: Draft) -> float | None:

@@ -43,6 +43,8 @@ def clash_message(clash: Clash) -> str:
         said = f"{mm(one.mm)} and {mm(other.mm)}, {float(off):.2g} % apart"
         return f"Two figures for the {NAMES[clash.slot]} disagree: {said}."
     pitch, wire, aperture = clash.lengths
+    if pitch.mm <= 0:
+        return f"A count or pitch of {pitch.written} is none."
     said = f"{float(MM_PER_INCH / pitch.mm):.4g} per inch is {mm(pitch.mm)}"
     return f"{mm(aperture.mm)} opening + {mm(wire.mm)} wire = {mm(aperture.mm + wire.mm)} pitch, but {said}."
 

@@ -30,7 +30,7 @@ def status_of(draft: Draft, decided: Decided, text: str) -> Understanding:
     asked = decided.question or (question(readings) if alone else None)
     status = _status(draft, readings, decided.must_ask or alone, missing)
     if status is Status.ASK and asked is None and not draft.problems:
-        asked = _rating_question(draft)
+        asked = _rating_question(readings) or f"What is meant for {', '.join(missing) or 'the cloth'}?"
     if (
         status in (Status.ASK, Status.NOTED, Status.CLEAR, Status.LIMITS, Status.INCOMPLETE)
         and asked is None
@@ -118,8 +118,8 @@ def _is_rated(alive: list[Reading]) -> bool:
     return bool(alive) and alive[0].rating is not None and alive[0].warp.pitch is None
 
 
-def _rating_question(draft: Draft) -> str | None:
-    rating = draft.rating
+def _rating_question(readings: list[Reading]) -> str | None:
+    rating = next((r.rating for r in readings if r.rating), None)
     if rating is None:
         return None
     kind = rating.kind if rating.kind != "unstated" else "rated"

@@ -129,6 +129,6 @@ def _unnamed_dutch(made: Combined, plain: Turned, more_weft: bool) -> list[Turne
 
 
 def _by_packing(made: Combined) -> Weave | None:
-    if not (made.weft.wire and made.weft.pitch):
+    if not (made.weft.wire and made.weft.pitch) or made.weft.pitch.mm <= 0:
         return None
     return Weave.PLAIN_DUTCH if made.weft.wire.mm / made.weft.pitch.mm < 1.35 else Weave.TWILLED_DUTCH

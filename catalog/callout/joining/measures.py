@@ -34,7 +34,7 @@ def _numbers_with_units(items: list[Item]) -> list[Item]:
         if behind.has("gauge") and not (behind.has("unit") and not behind.glued):
             number.unit, number.system = "gauge", behind.senses["gauge"]
             return join(number, behind, number), at + 2
-        unit = unit_of(behind)
+        unit = None if number.number is None else unit_of(behind)
         if unit is None or _is_preposition(items, at + 1):
             return _pieces(number, behind, at)
         return _with_unit(items, at, number, behind, unit)

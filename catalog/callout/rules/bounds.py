@@ -22,7 +22,9 @@ def bounds(draft: Draft) -> None:
 
 def _bound_product(draft: Draft, chain: Item) -> None:
     """'At least 30 by 30' bounds both directions; of unlike counts each would bound its own, which isn't held."""
-    members = [m for m in chain.members if not m.taken]
+    members = [m for m in chain.members if not m.taken and m.bound]
+    if not members:
+        return
     if all(m.is_count_like for m in members):
         for member in members:
             member.slot = member.slot or "mesh"

@@ -59,7 +59,7 @@ def pair(
 def count_claim(numbers: list[Item], unit: str | None = None) -> Claim | None:
     """The claim of one count or of a pair."""
     pitches = [p for n in numbers if (p := pitch_of_count(n, unit)) is not None]
-    return pair("pitch", numbers, pitches, by_count=True) if len(pitches) == len(numbers) else None
+    return pair("pitch", numbers, pitches, by_count=True) if pitches and len(pitches) == len(numbers) else None
 
 
 def length_claim(slot: str, numbers: list[Item], unit: str | None = None) -> Claim:

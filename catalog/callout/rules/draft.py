@@ -2,6 +2,7 @@
 
 from collections.abc import Sequence
 from dataclasses import dataclass, field
+from fractions import Fraction
 
 from catalog.callout.reading import Form, Likelihood, Problem
 from catalog.callout.text.items import Item
@@ -61,6 +62,8 @@ class Draft:
     missing: list[str] = field(default_factory=list)
     questions: list[str] = field(default_factory=list)
     """Questions that don't bear on the numbers: which brass."""
+    tolerances: dict[str, tuple[Fraction, Fraction]] = field(default_factory=dict)
+    """Figure → (minus, plus), as shares of it."""
     limits: dict[str, tuple[float | None, float | None]] = field(default_factory=dict)
     alloy: str | None = None
     material: str | None = None

@@ -20,7 +20,7 @@ def products_of_sizes(draft: Draft, size: Size) -> None:
             continue
         behind = members[at + 1] if at + 1 < len(members) else None
         other = behind if at == 0 or (behind and behind.unit in FORM_UNITS) else members[at - 1]
-        if other is not None and other.slot in (None, "width", "length") and other.unit != "gauge":
+        if other is not None and other.slot in (None, "width", "length") and _is_side(other):
             set_pair(draft, size, *((members[at], other) if other is behind else (other, members[at])))
         elif chain.members.index(members[at]) and chain.members[chain.members.index(members[at]) - 1].taken == "form":
             members[at].taken, size.length = "form", size.length or size_mm(members[at])
@@ -33,9 +33,14 @@ def _is_metres(members: list[Item], member: Item) -> bool:
     return any(m is not None and m.unit in ("M", "m", "mm") for m in around)
 
 
+def _is_side(number: Item) -> bool:
+    """True for a bare number or one with a unit of length."""
+    return number.number is not None and (number.unit in (None, "M") or number.is_length)
+
+
 def size_like(number: Item) -> bool:
     """True for what can be a side of a roll or a panel."""
-    return number.number is not None and number.slot is None and size_mm(number, "in") >= LEAST_SIZE_MM
+    return _is_side(number) and number.slot is None and size_mm(number, "in") >= LEAST_SIZE_MM
 
 
 def set_pair(draft: Draft, size: Size, one: Item, other: Item) -> None:

@@ -50,7 +50,8 @@ def size_mm(number: Item, unit: str | None = None) -> Fraction:
     """A size in mm; '1,000 mm' and '1.220 mm' are thousands, since no roll is a millimetre wide."""
     assert number.number
     value = number.number
-    scale = MM_PER_UNIT[{"M": "m"}.get(number.unit or "", number.unit) or unit or "mm"]
+    own = "m" if number.unit == "M" else number.unit
+    scale = MM_PER_UNIT.get(own or unit or "mm", Fraction(1))
     in_thousands = value.kind == "grouped" and number.unit in ("ft", "in")
     if in_thousands or (scale == 1 and value.value < LEAST_SIDE_MM and THOUSANDS.fullmatch(value.written)):
         return value.value * 1000 * scale

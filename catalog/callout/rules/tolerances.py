@@ -1,34 +1,37 @@
-"""What a figure may be off by, as the text states it: limits beside the figure."""
+"""What a figure may be off by, as the text states it: a share of the figure, whichever unit it turns out to be in."""
 
-from dataclasses import replace
+from fractions import Fraction
 
-from catalog.callout.rules.bound_values import MOST, figures_of, limit
 from catalog.callout.rules.draft import Draft
+from catalog.callout.text.items import Item
+from catalog.units import MM_PER_UNIT
 
-KEYS = {"aperture": "aperture_mm", "wire": "wire_mm", "pitch": "pitch_mm", "count": "count_per_in"}
 TOLERABLE = {"aperture": "aperture", "wire": "wire", "pitch": "pitch", "mesh": "count", "count": "count"}
 
 
 def tolerances(draft: Draft) -> None:
-    """'0.25 mm ±5 %' and '60 mesh ±1' are limits beside the figure."""
+    """'0.25 mm ±5 %', '60 mesh ±1', '.0075 ±.0003': limits beside the figure."""
     for number in draft.all_numbers():
         slot = TOLERABLE.get(number.taken) or TOLERABLE.get(number.slot or "")
-        if number.tolerance is None or slot is None or number.number is None:
+        if number.tolerance is None or slot is None or number.number is None or number.number.value <= 0:
             continue
-        plus, minus = number.tolerance
-        for off, sign in ((minus, -1), (plus, +1)):
-            if off is None or off.number is None:
-                continue
-            share = off.unit == "%"
-            value = float(figures_of(number, slot)[0][0])
-            step = (
-                value * float(off.number.value) / 100
-                if share
-                else float(figures_of(replace(off, unit=off.unit or number.unit), slot)[0][0])
-            )
-            limit(draft, KEYS[slot], MOST if sign > 0 else "least", round(value + sign * step, 9))
-        draft.note(
-            f"the tolerance on {slot} is taken as that of the average, not of single openings"
-            if slot == "aperture"
-            else f"tolerance on {slot} as stated"
-        )
+        plus, minus = (_share(off, number) for off in number.tolerance)
+        if plus is None or minus is None:
+            draft.problem("E_NOT_UNDERSTOOD", f"The tolerance on {number.text} isn't understood.", number)
+            continue
+        draft.tolerances[slot] = (minus, plus)
+        average = "the tolerance on the opening is taken as that of the average, not of single openings"
+        draft.note(average if slot == "aperture" else f"tolerance on the {slot} as stated")
+
+
+def _share(off: Item | None, number: Item) -> Fraction | None:
+    """How much of the figure the tolerance is; None where the two can't be compared."""
+    if off is None or off.number is None or number.number is None:
+        return None
+    if off.unit == "%":
+        return off.number.value / 100
+    if off.unit is None or off.unit == number.unit:
+        return off.number.value / number.number.value
+    if off.is_length and number.is_length and off.unit and number.unit:
+        return off.number.value * MM_PER_UNIT[off.unit] / (number.number.value * MM_PER_UNIT[number.unit])
+    return None
