@@ -2,32 +2,23 @@
 
 import argparse
 import re
-from collections.abc import Callable, Iterator, Mapping, Sequence
+from collections.abc import Callable
 from typing import TYPE_CHECKING, Any
 
 from catalog.errors import InputError
+from tui.commandline.listing_text import cloth_line, list_lines, moved_lines
 from tui.commandline.match import weave_of
 from tui.commandline.options import Setting
-from tui.exit_codes import ExitCode, one_line
+from tui.exit_codes import ExitCode
 
 if TYPE_CHECKING:
     from catalog.cloth import Cloth
-    from catalog.search.limit_report import LimitReport
     from catalog.search.reader import Filters, Range
-    from catalog.stock.lots import Lot
 
 SORTS = ("aperture", "wire", "open-area", "mass", "id")
 UNITS = {"mm": 1.0, "um": 0.001, "µm": 0.001, "μm": 0.001, "in": 25.4, '"': 25.4, "thou": 0.0254}
 NUMBER = r"(\d*[.,]?\d+)"
 RANGE = re.compile(rf"^\s*{NUMBER}?\s*(\.\.)?\s*{NUMBER}?\s*(mm|um|µm|μm|in|\"|thou)\s*$")
-LABELS = {
-    "aperture_mm": ("aperture", "mm"),
-    "wire_mm": ("wire", "mm"),
-    "open_area_pct": ("open area", "points"),
-    "mass_kg_m2": ("mass", "kg/m²"),
-    "thickness_mm": ("thickness", "mm"),
-}
-STAINLESS = "stainless"
 
 
 def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest: Any) -> None:
@@ -46,6 +37,7 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     parser.add_argument("--flow", metavar="TEXT", help="fluid and face velocity: 'air 20 C 2 m/s'")
     parser.add_argument("--called", metavar="COUNT", type=int, help="everything that goes by a spoken name: 60")
     parser.add_argument("--in-stock", action="store_true")
+    parser.add_argument("--move", metavar="LIMIT=VALUE", help="which lines come and go: 'min-open-area=44'")
     parser.add_argument("--sort", choices=SORTS, default="aperture")
     parser.add_argument("--limit", type=int, metavar="N", help="how many to list (default: all)")
     parser.set_defaults(run=run)
@@ -53,9 +45,12 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
 
 def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
     """List what lies inside the limits; where nothing does, say why and what is near."""
-    from catalog.search.limit_report import filters_of, limit_report
+    from catalog.search.limit_report import come_and_go, filters_of, limit_report
 
     limits, scope = limits_of(arguments), scope_of(arguments)
+    moved = moved_limits(arguments)
+    if arguments.limit is not None and arguments.limit < 1:
+        raise InputError(f"--limit takes 1 or more, not {arguments.limit}.")
     if arguments.called is not None:
         return _called(arguments.called, scope, setting)
     with setting.open() as store:
@@ -68,12 +63,18 @@ def run(arguments: argparse.Namespace, setting: Setting) -> ExitCode:
             total, cloths = len(every), every[: arguments.limit]
         report = limit_report(limits, scope, store) if limits or scope != type(scope)() else None
         lots = store.lots([c.id for c in cloths])
+        after = () if moved is None else store.select(filters_of(moved, scope), arguments.sort)
+        come, go = ((), ()) if moved is None else come_and_go(store.select(filters, arguments.sort), after)
     if setting.json:
         from catalog.report.documents import list_document
 
-        setting.write_json(list_document(total, cloths, report, lots))
+        document = list_document(total, cloths, report, lots)
+        if moved is not None:
+            document["moved"] = {"come": [c.id for c in come], "go": [c.id for c in go]}
+        setting.write_json(document)
     else:
         setting.write(list_lines(total, cloths, report, lots, setting.units))
+        setting.write(moved_lines(come, go, setting.units) if moved is not None else ())
     return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
 
 
@@ -97,6 +98,24 @@ def _called(count: int, scope: "Filters", setting: Setting) -> ExitCode:
     else:
         setting.write([f"Nothing here goes by {count}."])
     return ExitCode.DONE if cloths else ExitCode.NOTHING_WITHIN_LIMITS
+
+
+MOVABLE = ("aperture", "wire", "thickness", "min-open-area", "max-mass")
+
+
+def moved_limits(arguments: argparse.Namespace) -> "dict[str, Range] | None":
+    """The limits with the one that --move names put elsewhere. Raises InputError."""
+    if arguments.move is None:
+        return None
+    name, _, value = arguments.move.partition("=")
+    if name not in MOVABLE or not value:
+        raise InputError(f"--move takes one of {', '.join(MOVABLE)} and a value, as in min-open-area=44.")
+    key = name.replace("-", "_")
+    try:
+        put = float(value.replace(",", ".")) if name.startswith("m") else value
+    except ValueError:
+        raise InputError(f"--move {name} takes a number, not {value!r}.") from None
+    return limits_of(argparse.Namespace(**{**vars(arguments), key: put}))
 
 
 def limits_of(arguments: argparse.Namespace) -> "dict[str, Range]":
@@ -189,65 +208,3 @@ def alloys_of(text: str) -> frozenset[str]:
             raise InputError(f"No alloy or family is called {name!r}: 'crosscloth tables alloys' lists them.")
         found |= family if one is None else {one.id}
     return frozenset(found)
-
-
-def list_lines(
-    total: int,
-    cloths: "Sequence[Cloth]",
-    report: "LimitReport | None",
-    lots: "Mapping[str, Sequence[Lot]]",
-    units: str,
-) -> Iterator[str]:
-    """A line a cloth; then what the limits did."""
-    for cloth in cloths:
-        yield cloth_line(cloth, len(lots.get(cloth.id, ())), units)
-    shown = f"{len(cloths)} of {total}"
-    yield f"{shown} cloths inside the limits." if report else f"{shown} cloths."
-    if report:
-        yield from report_lines(report, bool(cloths))
-
-
-def cloth_line(cloth: "Cloth", lots: int, units: str) -> str:
-    """One cloth on one line."""
-    figures, made = cloth.figures, cloth.construction
-    if made.is_filter:
-        size = f"{float(made.warp.count_per_in):.0f} x {float(made.weft.count_per_in):.0f}/in"
-        size += f" rated {cloth.rating.um:g} µm" if cloth.rating else " no rating"
-    else:
-        size = f"w {_pair(figures.warp_aperture_mm or 0, figures.weft_aperture_mm or 0, units)}"
-        size += f"  d {_pair(float(made.warp.wire_mm), float(made.weft.wire_mm), units)}  {figures.open_area_pct:.1f} %"
-    stock = f"  {lots} lots" if lots > 1 else "  1 lot" if lots else ""
-    return f"{cloth.id:<14} {one_line(cloth.name)}  {size}{stock}" + ("  demo" if cloth.demo else "")
-
-
-def _pair(one: float, other: float, units: str) -> str:
-    values = (one,) if abs(one - other) < 1e-9 else (one, other)
-    metric = " x ".join(f"{value:.4g}" for value in values) + " mm"
-    inch = " x ".join(f"{value / 25.4:.4f}" for value in values) + " in"
-    return {"metric": metric, "inch": inch}.get(units, f"{metric} {inch}")
-
-
-def report_lines(report: "LimitReport", served: bool) -> Iterator[str]:
-    """Which limit removed how many, the near misses with their shortfall, the window that would satisfy."""
-    for removed in report.removed:
-        name = LABELS.get(removed.limit, (removed.limit, ""))[0]
-        yield f"  without the limit on {name}: {removed.removed} more"
-    if report.near:
-        yield "Just outside:" if served else "Nothing satisfies all limits. Just outside:"
-    for miss in report.near:
-        short = ", ".join(f"{LABELS[s.limit][0]} by {s.by:.3g} {LABELS[s.limit][1]}" for s in miss.short_of)
-        yield f"  {miss.cloth.id:<14} {one_line(miss.cloth.name)}: short of {short}"
-    if report.window:
-        yield from _window_line(report.window)
-
-
-def _window_line(window: Any) -> Iterator[str]:
-    low, high = window.aperture
-    if window.is_empty:
-        yield f"No square cloth satisfies them: the wire asks an aperture of {low:.3f} mm, the limit is {high:.3f} mm."
-        return
-    aperture = f"{low:.3f} ≤ w ≤ {high:.3f} mm" if high is not None else f"w ≥ {low:.3f} mm"
-    most = window.wire[1]
-    upper = f" ≤ {window.wire_per_aperture:.4f} w" if window.wire_per_aperture else ""
-    upper += f" ≤ {most:g} mm" if most is not None else ""
-    yield f"Square cloth satisfies them where {aperture} and {window.wire[0]:g} ≤ d{upper}."
