@@ -2,19 +2,20 @@
 
 from bisect import bisect_left
 from collections.abc import Iterable, Iterator
-from dataclasses import dataclass
-from math import log
+from dataclasses import dataclass, replace
+from math import inf, log
 from typing import NamedTuple
 
 from catalog.aiming import aim
 from catalog.callout.reading import Reading, Side
 from catalog.cloth import Cloth
+from catalog.construction import Weave
 from catalog.search.candidate import Candidate
 from catalog.search.judging import assess
 from catalog.units import Length
 
-NEIGHBOURS = 12
-"""Cloths looked at each way along the aperture; the nearest by the distance of the search wins."""
+APERTURE_WEIGHT = 4.0
+"""Of Δln(aperture)²: 2 for warp and 2 for weft, as in the distance of the search."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -40,39 +41,77 @@ def reading_of(cloth: Cloth) -> Reading:
 
 
 def equivalents(cloths: Iterable[Cloth]) -> Iterator[Equivalent]:
-    """Pair square cloth of the inch and the metric system, fine to coarse. Alloys are left aside: any will do."""
-    square = [_placed(c) for c in cloths if c.construction.is_square]
-    inch = sorted((p for p in square if p.cloth.unit_system == "inch"), key=_by_aperture)
-    metric = sorted((p for p in square if p.cloth.unit_system == "metric"), key=_by_aperture)
-    if not metric:
-        return
-    keys = [p.ln_aperture for p in metric]
-    for place in inch:
-        at = bisect_left(keys, place.ln_aperture)
-        near = metric[max(0, at - NEIGHBOURS) : at + NEIGHBOURS]
-        yield _paired(place.cloth, min(near, key=lambda other: (_distance(place, other), other.cloth.id)).cloth)
+    """Pair each square inch cloth with the nearest metric one of its weave, fine to coarse; ties by id.
+
+    Alloys are left aside: any will do. A make that is listed in several alloys is judged once.
+    """
+    square = sorted((_placed(c) for c in cloths if c.construction.is_square), key=_by_aperture)
+    shelves = {weave: Shelf(p for p in square if p.is_metric(weave)) for weave in Weave if not weave.is_filter}
+    known: dict[tuple[Weave, float, float], Equivalent] = {}
+    for place in square:
+        shelf = shelves[place.cloth.construction.weave]
+        if place.cloth.unit_system == "inch" and not shelf.is_empty:
+            make = (place.cloth.construction.weave, place.ln_aperture, place.ln_wire)
+            if make not in known:
+                known[make] = _paired(place.cloth, shelf.nearest(place).cloth)
+            yield replace(known[make], inch=place.cloth)
 
 
-class _Place(NamedTuple):
+class Place(NamedTuple):
+    """A square cloth by the logarithms that the distance is made of."""
+
     cloth: Cloth
     ln_aperture: float
     ln_wire: float
     ln_open_area: float
 
+    def is_metric(self, weave: Weave) -> bool:
+        """True for metric cloth of this weave."""
+        return self.cloth.unit_system == "metric" and self.cloth.construction.weave is weave
 
-def _placed(cloth: Cloth) -> _Place:
+
+class Shelf:
+    """Cloths in order of aperture, each make once: the one with the least id."""
+
+    def __init__(self, ascending: Iterable[Place]) -> None:
+        makes: dict[tuple[float, float], Place] = {}
+        for place in ascending:
+            makes.setdefault((place.ln_aperture, place.ln_wire), place)
+        self._places = list(makes.values())
+        self._keys = [place.ln_aperture for place in self._places]
+
+    @property
+    def is_empty(self) -> bool:
+        """True where there is nothing to be near to."""
+        return not self._places
+
+    def nearest(self, place: Place) -> Place:
+        """The nearest by the distance of the search: outwards from the aperture until it alone is too far."""
+        at = bisect_left(self._keys, place.ln_aperture)
+        best: tuple[float, str, int] = (inf, "", 0)
+        for way in (range(at, len(self._places)), range(at - 1, -1, -1)):
+            for index in way:
+                apart = self._keys[index] - place.ln_aperture
+                if APERTURE_WEIGHT * apart * apart > best[0]:
+                    break
+                other = self._places[index]
+                best = min(best, (_distance(place, other), other.cloth.id, index))
+        return self._places[best[2]]
+
+
+def _placed(cloth: Cloth) -> Place:
     wire = float(cloth.construction.warp.wire_mm)
-    return _Place(cloth, log(cloth.figures.warp_aperture_mm or 1), log(wire), log(cloth.figures.open_area_pct or 1))
+    return Place(cloth, log(cloth.figures.warp_aperture_mm or 1), log(wire), log(cloth.figures.open_area_pct or 1))
 
 
-def _by_aperture(place: _Place) -> tuple[float, str]:
+def _by_aperture(place: Place) -> tuple[float, str]:
     return (place.ln_aperture, place.cloth.id)
 
 
-def _distance(one: _Place, other: _Place) -> float:
+def _distance(one: Place, other: Place) -> float:
     """The distance of the search for square cloth: 4 Δln(w)² + 2 Δln(d)² + Δln(A)²."""
     w, d, a = other.ln_aperture - one.ln_aperture, other.ln_wire - one.ln_wire, other.ln_open_area - one.ln_open_area
-    return 4 * w * w + 2 * d * d + a * a
+    return APERTURE_WEIGHT * w * w + 2 * d * d + a * a
 
 
 def _paired(inch: Cloth, metric: Cloth) -> Equivalent:

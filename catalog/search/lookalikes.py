@@ -1,5 +1,6 @@
 """Names that mislead: look-alikes on one rack, one spoken name for many cloths, one cloth listed twice."""
 
+from bisect import bisect_right
 from collections import defaultdict
 from collections.abc import Iterable, Iterator
 from dataclasses import dataclass
@@ -13,6 +14,7 @@ APART = 0.05
 COUNT_ROUNDING = Fraction(1, 200)
 SAME_APERTURE = Fraction(5, 1000)
 SAME_WIRE = Fraction(1, 100)
+ROUNDING = 1e-9
 
 
 @dataclass(frozen=True, slots=True)
@@ -93,13 +95,15 @@ def listed_twice(cloths: Iterable[Cloth]) -> Iterator[Pair]:
 
 
 def _twice_in(ascending: list[Cloth]) -> Iterator[Pair]:
-    for at, one in enumerate(ascending):
-        most = _by_aperture(one)[0] * (1 + float(SAME_APERTURE))
-        for other in ascending[at + 1 :]:
-            if _by_aperture(other)[0] > most:
-                break
-            if one.unit_system != other.unit_system and _agree(one, other):
-                yield Pair(one, other, (_by_aperture(other)[0] / _by_aperture(one)[0] - 1) * 100)
+    """Pairs across the unit systems; figures as floats, with some slack, spare most of the exact comparisons."""
+    rows = [(_by_aperture(c)[0], float(c.construction.warp.wire_mm), c.unit_system == "inch", c) for c in ascending]
+    apertures = [row[0] for row in rows]
+    for at, (aperture, wire, is_inch, one) in enumerate(rows):
+        end = bisect_right(apertures, aperture * (1 + float(SAME_APERTURE)) * (1 + ROUNDING), at + 1)
+        slack = wire * 2 * float(SAME_WIRE)
+        for its_aperture, its_wire, its_inch, other in rows[at + 1 : end]:
+            if is_inch is not its_inch and abs(its_wire - wire) <= slack and _agree(one, other):
+                yield Pair(one, other, (its_aperture / aperture - 1) * 100)
 
 
 def _agree(one: Cloth, other: Cloth) -> bool:
