@@ -142,19 +142,34 @@ def _figure(cloth: Cloth, name: str) -> float | None:
 
 
 def window(limits: Mapping[str, Range]) -> Window | None:
-    """The window of square cloth inside limits on aperture, wire and open area; None where none of them is set.
+    """The window of square cloth inside limits on aperture, wire, thickness and open area.
 
-    From A = (w/(w+d))² follows d ≤ w·(1/√A − 1), so a least wire asks a least aperture.
-    Source: derived from the definition of open area.
+    From A = (w/(w+d))² follows d ≤ w·(1/√A − 1), so a least wire asks a least aperture; thickness is 2d at least.
+    None where no such limit is set, and where a limit on mass or a most open area would cut into the window:
+    then a pair inside it needn't satisfy. Source: derived from the definition of open area.
     """
     low_w, high_w = limits.get("aperture_mm", (None, None))
-    low_d, high_d = limits.get("wire_mm", (None, None))
-    least_open = limits.get("open_area_pct", (None, None))[0]
-    if low_w is None and high_w is None and low_d is None and high_d is None and least_open is None:
+    low_d, high_d = _wires(limits)
+    least_open, most_open = limits.get("open_area_pct", (None, None))
+    if all(bound is None for bound in (low_w, high_w, low_d, high_d, least_open)):
         return None
     ratio = 1 / sqrt(least_open / 100) - 1 if least_open else None
     needed = low_d / ratio if low_d is not None and ratio else 0.0
-    return Window((max(low_w or 0.0, needed), high_w), (low_d or 0.0, high_d), ratio)
+    found = Window((max(low_w or 0.0, needed), high_w), (low_d or 0.0, high_d), ratio)
+    is_cut = most_open is not None or "mass_kg_m2" in limits
+    return None if is_cut and not found.is_empty else found
+
+
+def _wires(limits: Mapping[str, Range]) -> Range:
+    """Bounds on the wire, mm: its own, and half the thickness's."""
+    low, high = limits.get("wire_mm", (None, None))
+    thin, thick = limits.get("thickness_mm", (None, None))
+    lows = [low, None if thin is None else thin / 2]
+    highs = [high, None if thick is None else thick / 2]
+    return (
+        max((bound for bound in lows if bound is not None), default=None),
+        min((bound for bound in highs if bound is not None), default=None),
+    )
 
 
 def come_and_go(before: Sequence[Cloth], after: Sequence[Cloth]) -> tuple[tuple[Cloth, ...], tuple[Cloth, ...]]:
