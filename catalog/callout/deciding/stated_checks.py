@@ -45,6 +45,8 @@ def check_mass(draft: Draft, reading: Reading) -> None:
     """A stated mass has to fit the alloy, or some common metal where none is named."""
     if draft.mass is None or draft.is_dutch or not is_whole(reading) or draft.mass.number is None:
         return
+    if any(side.pitch and side.wire and side.wire.mm >= side.pitch.mm for side in (reading.warp, reading.weft)):
+        return
     stated = float(figures_of(draft.mass, "mass")[0][0])
     slack = float(draft.mass.number.half_unit / draft.mass.number.value) if draft.mass.number.value else 0.0
     names = (draft.alloy,) if draft.alloy and alloys.density_kg_m3(draft.alloy) else COMMON_METALS

@@ -11,8 +11,8 @@ from catalog.reference import alloys
 EDGE = r"(?<![\w])"
 END = r"(?![\w])"
 MONTH = (
-    r"(?:jan(?:uary?)?|feb(?:ruary?)?|mar(?:ch|s)?|märz?|mrz|apr(?:il)?|may|mai|jun[ei]?|jul[yi]?|aug(?:ust)?|sept?(?:ember)?"
-    r"|o[ck]t(?:ober)?|nov(?:ember)?|de[cz](?:ember)?)"
+    r"(?:JAN(?:UARY?)?|FEB(?:RUARY?)?|MAR(?:CH|S)?|MÄRZ?|MRZ|APR(?:IL)?|MAY|MAI|JUN[EI]?|JUL[YI]?|AUG(?:UST)?|SEPT?(?:EMBER)?"
+    r"|O[CK]T(?:OBER)?|NOV(?:EMBER)?|DE[CZ](?:EMBER)?)"
 )
 
 STANDARD = (
@@ -20,7 +20,7 @@ STANDARD = (
     r"|ASTM[ -]?(?:E|A|B)[ -]?\d{2,4}(?:[-/]\d{2,4})?|E[ -]?11(?:[-:]\d{2,4})?(?![\d.])|E[ -]?2016(?:[-:]\d{2,4})?"
     r"|RR-W-360[A-Z]?(?:[ ,]+(?:TYPE|CL(?:ASS)?)\.?\s*[IVX\d]+)*|MIL-[A-Z]-\d+[A-Z]?"
 )
-CERTIFICATE = r"(?:DIN[ -]?)?(?:EN[ -]?)(?:ISO[ -]?)?10204(?:[-:]\d{4})?[ ,:/-]*(?:type[ ]|typ[ ])?(?P<cert1>[23][.,][12])[ABC]?|(?P<cert2>[23]\.[12])[ABC](?![\w.])"
+CERTIFICATE = r"(?:DIN[ -]?)?(?:EN[ -]?)(?:ISO[ -]?)?10204(?:[-:]\d{4})?[ ,:/-]*(?:TYPE[ ]|TYP[ ])?(?P<cert1>[23][.,][12])[ABC]?|(?P<cert2>[23]\.[12])[ABC](?![\w.])"
 DATE = rf"\d{{1,2}}[-.]{{1,2}}\s?{MONTH}(?:[-. ]\d{{2,4}})?{END}|{MONTH}[-. ]{{1,2}}\d{{1,2}}{END}(?![./,]\d)|\d{{4}}-\d\d-\d\d(?:[ T]00:00(?::00)?)?|\d{{1,2}}[./]\d{{1,2}}[./](?:19|20)\d\d"
 
 PREFIX = r"(?:AISI|SAE|ASTM|TYPE|TYP|TP|TY|GRADE|GR|SS|S\.S\.|SST|SUS|INOX|RVS|ALLOY|T)"
@@ -45,9 +45,9 @@ CODE = r"[A-Z\d]++(?:[.,]\d++)?(?:[-/][A-Z\d]++(?:[.,]\d++)?){2,40}"
 DESIGNATION = re.compile(
     rf"{EDGE}(?:(?P<certificate>{CERTIFICATE})|(?P<date>{DATE})|(?P<standard>{STANDARD})"
     rf"|(?P<split>{SPLIT})(?=[ ,;]|$)|(?P<alloy>{ALLOY})){END}",
-    re.IGNORECASE,
 )
-CODES = re.compile(rf"(?<!\S){CODE}(?=[,;]?(?:\s|$))", re.IGNORECASE)
+"""Matched against the text in capitals, letter for letter: see *capitals*."""
+CODES = re.compile(rf"(?<!\S){CODE}(?=[,;]?(?:\s|$))")
 MIXED_NUMBER = re.compile(r"\d{1,3}-\d{1,2}/\d{1,2}")
 GOST_MESH = re.compile(r"(?:(?P<group>[123])-)?(?P<aperture>\d{1,3}(?:[.,]\d+)?)-(?P<wire>\d{1,3}(?:[.,]\d+)?)")
 
@@ -74,6 +74,12 @@ def alloy_id(name: str) -> str:
         r"^(?:werkst|wnr|w\.-?nr|uns|aisi|type|typ|tp|sus|ss|sst|t|w)[. -]*(?=\d)", "", name, flags=re.IGNORECASE
     )
     return re.sub(r"[ -]?(?:SS|SST|S/S)$", "", plain, flags=re.IGNORECASE).strip(" .-").upper()
+
+
+def capitals(text: str) -> str:
+    """*text* in capitals, of the same length."""
+    plain = text.upper()
+    return plain if len(plain) == len(text) else "".join(c.upper() if len(c.upper()) == 1 else c for c in text)
 
 
 def code_at(text: str, offset: int) -> re.Match[str] | None:

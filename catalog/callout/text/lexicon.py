@@ -58,29 +58,34 @@ def atoms(folded: str) -> list[tuple[str, int, int]]:
 
 
 @cache
-def _root() -> Node:
+def _by_initial() -> dict[str, list[tuple[str, str, str]]]:
+    """(phrase, role, value) by first character: a text needs but few of them, so the rest is never taken apart."""
+    found: dict[str, list[tuple[str, str, str]]] = {}
+    rows = [(role, value, phrases) for role, table in TABLES for value, phrases in table.items()]
+    for role, value, phrases in (*rows, *((role, "", phrases) for role, phrases in LISTS)):
+        for phrase in phrases.split(","):
+            if bare := phrase.strip():
+                found.setdefault(fold(bare[0]), []).append((bare, role, value))
+    return found
+
+
+@cache
+def _root(initial: str) -> Node:
+    """The phrases that begin with a character, as a tree of their words."""
     root = Node()
-    for role, table in TABLES:
-        for value, phrases in table.items():
-            _add(root, role, value, phrases)
-    for role, phrases in LISTS:
-        _add(root, role, "", phrases)
-    return root
-
-
-def _add(root: Node, role: str, value: str, phrases: str) -> None:
-    for phrase in phrases.split(","):
+    for phrase, role, value in _by_initial().get(initial, ()):
         node = root
-        for key, _, _ in atoms(fold(phrase.strip())):
+        for key, _, _ in atoms(fold(phrase)):
             if key not in ".-":
                 node = node.onward.setdefault(key, Node())
-        if node is not root:
-            node.senses.setdefault(role, value)
+        node.senses.setdefault(role, value)
+    return root
 
 
 def is_word(word: str) -> bool:
     """True where *word* alone is in the vocabulary."""
-    node = _root().onward.get(fold(word))
+    key = fold(word)
+    node = _root(key[:1]).onward.get(key)
     return node is not None and bool(node.senses)
 
 
@@ -89,7 +94,7 @@ def longest(row: list[tuple[str, int, int]], at: int) -> tuple[int, dict[str, st
 
     A point behind a word and a hyphen between two words are passed over: 'ph. bronze', 'hi-carbon', 'o.c.'
     """
-    node, best, index = _root(), None, at
+    node, best, index = _root(row[at][0][0]), None, at
     while index < len(row) and (step := node.onward.get(row[index][0])):
         node, index = step, index + 1
         if node.senses:

@@ -48,7 +48,7 @@ class Repaired:
         """The stretch of the original text that [start, end) came from."""
         if self.places is None:
             return start, end
-        return self.places[start], max(self.places[end], self.places[start])
+        return self.places[start], max(self.places[end], self.places[max(start, end - 1)] + 1)
 
 
 def repair(text: str) -> Repaired:
@@ -86,7 +86,8 @@ def _meant(found: re.Match[str], text: str, notes: dict[str, None]) -> str | Non
     if kind == "damage":
         return _mend(seen, notes)
     if kind == "vulgar":
-        return (" " if text[found.start() - 1 : found.start()].isdecimal() else "") + VULGAR[seen]
+        before, after = text[found.start() - 1 : found.start()], text[found.end() : found.end() + 1]
+        return (" " if before.isdecimal() else "") + VULGAR[seen] + (" " if after.isdecimal() else "")
     if kind == "sign":
         return PLAIN_SIGNS[seen]
     fixed = {"raised": ".", "times": "x", "star": "x", "twice": '"', "about": "±", "swiss": "", "control": " "}
