@@ -1,6 +1,6 @@
 """Differences, property by property: asked, found, off by, inside or not."""
 
-from collections.abc import Iterator
+from dataclasses import replace
 from fractions import Fraction
 from functools import lru_cache
 
@@ -14,7 +14,10 @@ from catalog.search.rules import HouseRules
 
 def deviations(c: Comparison, rules: HouseRules) -> tuple[Deviation, ...]:
     """Every deviation of a cloth. A figure that wasn't asked is shown and not judged (inside is None)."""
-    found = [d for direction in c.directions for d in _of_direction(direction, c, rules)]
+    warp, weft = c.directions
+    found = _of_direction(warp, c, rules)
+    is_alike = replace(warp, name="weft") == weft
+    found += [replace(d, name=f"weft{d.name[4:]}") for d in found] if is_alike else _of_direction(weft, c, rules)
     if not c.made.is_filter:
         found.append(_open_area(c, rules))
     found.append(_section(c, rules))
@@ -22,25 +25,30 @@ def deviations(c: Comparison, rules: HouseRules) -> tuple[Deviation, ...]:
     return tuple(found)
 
 
-def _of_direction(d: Direction, c: Comparison, rules: HouseRules) -> Iterator[Deviation]:
+def _of_direction(d: Direction, c: Comparison, rules: HouseRules) -> list[Deviation]:
+    found = []
     if not c.made.is_filter:
-        limit = None if d.tolerance is None or not d.asked_aperture else d.tolerance / d.asked_aperture * 100
-        yield _relative(f"{d.name}.aperture", d.asked_aperture, d.found.aperture_mm, limit)
+        found.append(
+            _relative(f"{d.name}.aperture", d.asked_aperture, d.found.aperture_mm, d.aperture_off, d.tolerance)
+        )
     share = rules.filter_make if c.made.is_filter else rules.wire
-    yield _relative(f"{d.name}.wire", d.asked_wire, d.found.wire_mm, share * 100)
-    yield _relative(f"{d.name}.pitch", d.asked_pitch, d.found.pitch_mm, None)
+    most = None if d.asked_wire is None else share * d.asked_wire
+    found.append(_relative(f"{d.name}.wire", d.asked_wire, d.found.wire_mm, d.wire_off, most))
+    pitch_off = None if d.asked_pitch is None else d.found.pitch_mm - d.asked_pitch
+    found.append(_relative(f"{d.name}.pitch", d.asked_pitch, d.found.pitch_mm, pitch_off, None))
+    return found
 
 
-def _relative(name: str, asked: Fraction | None, found: Fraction, limit: Fraction | None) -> Deviation:
-    if not asked:
+def _relative(
+    name: str, asked: Fraction | None, found: Fraction, off: Fraction | None, most: Fraction | None
+) -> Deviation:
+    """In percent of the asked for the eye; inside or not by the exact figures, *off* and *most* in mm."""
+    if not asked or off is None:
         return Deviation(name, None, float(found), None, "%")
-    off = (found - asked) / asked * 100
-    inside = None if limit is None else abs(off) <= limit
-    return Deviation(name, float(asked), float(found), float(off), "%", _float(limit), inside)
-
-
-def _float(value: Fraction | None) -> float | None:
-    return None if value is None else float(value)
+    base = float(asked)
+    limit = None if most is None else float(most) / base * 100
+    inside = None if most is None else abs(off) <= most
+    return Deviation(name, base, float(found), float(off) / base * 100, "%", limit, inside)
 
 
 def _open_area(c: Comparison, rules: HouseRules) -> Deviation:

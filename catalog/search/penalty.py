@@ -9,17 +9,16 @@ from catalog.target import Purpose
 
 def penalty(c: Comparison, purposes: tuple[Purpose, ...], rules: HouseRules) -> Penalty:
     """|Δw|/T, twice on the side that hurts, plus 0.5·|Δd|/10 % plus 0.5·|ΔA|/3 points; worse direction each."""
-    aperture = max((_aperture_part(d, purposes) for d in c.directions), default=0.0)
-    wire = max(
-        (
-            float(abs(d.wire_off) / d.asked_wire / rules.wire) * 0.5
-            for d in c.directions
-            if d.wire_off is not None and d.asked_wire
-        ),
-        default=0.0,
-    )
+    aperture = max(_aperture_part(d, purposes) for d in c.directions)
+    wire = max(_wire_part(d, float(rules.wire)) for d in c.directions)
     points = c.open_points if not c.made.is_filter else None
-    return Penalty(aperture, wire, 0.0 if points is None else float(abs(points) / rules.open_area_points) * 0.5)
+    return Penalty(aperture, wire, 0.0 if points is None else abs(float(points)) / float(rules.open_area_points) * 0.5)
+
+
+def _wire_part(d: Direction, share: float) -> float:
+    if d.wire_off is None or not d.asked_wire:
+        return 0.0
+    return abs(float(d.wire_off)) / float(d.asked_wire) / share * 0.5
 
 
 def _aperture_part(d: Direction, purposes: tuple[Purpose, ...]) -> float:
@@ -27,4 +26,4 @@ def _aperture_part(d: Direction, purposes: tuple[Purpose, ...]) -> float:
     if off is None or not d.tolerance:
         return 0.0
     twice = 2 if any(harm(purpose, off) for purpose in purposes) else 1
-    return float(abs(off) / d.tolerance) * twice
+    return abs(float(off)) / float(d.tolerance) * twice
