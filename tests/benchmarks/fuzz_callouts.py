@@ -10,7 +10,7 @@ import time
 from multiprocessing import Pool, cpu_count
 from pathlib import Path
 
-from catalog import callout
+from catalog.callout import reader
 
 sys.path.insert(0, str(Path(__file__).parents[1] / "properties"))
 from test_callout_robust import PIECES, check  # noqa: E402
@@ -64,7 +64,7 @@ def run(job: tuple[int, int]) -> tuple[int, float, list[str]]:
         text = line(dice)
         start = time.perf_counter()
         try:
-            understood = callout.read(text)
+            understood = reader.read(text)
             slowest = max(slowest, time.perf_counter() - start)
             check(text, understood)
         except Exception as error:
