@@ -15,6 +15,7 @@ MM_PER_UNIT: dict[str, Fraction] = {
     "thou": MM_PER_INCH / 1000,
 }
 LARGEST_ROUNDING = Fraction(25, 1000)  # a written decimal stands for at most ±2.5 % of itself
+LARGEST_POWER = 12
 LONGEST_NUMBER = 24  # digits; what is longer is no measure of anything
 
 
@@ -109,6 +110,8 @@ def _decimal(text: str) -> Number | None:
     if not found:
         return None
     whole, decimals, power = found.groups()
+    if abs(int(power or 0)) > LARGEST_POWER:
+        return None
     scale = Fraction(10) ** (int(power or 0) - len(decimals))
     return Number(int(f"{whole}{decimals}" or 0) * scale, scale / 2, "decimal", text)
 

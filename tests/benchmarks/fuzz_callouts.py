@@ -13,7 +13,7 @@ from pathlib import Path
 from catalog.callout import reader
 
 sys.path.insert(0, str(Path(__file__).parents[1] / "properties"))
-from test_callout_robust import PIECES, check  # noqa: E402
+from test_callout_robust import PIECES, check
 
 DATA = Path(__file__).parents[1] / "published" / "data" / "callouts_from_practice.jsonl"
 SEEDS = [json.loads(line)["text"] for line in DATA.read_text("utf-8").splitlines()]

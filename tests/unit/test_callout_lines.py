@@ -1,4 +1,6 @@
-"""Callouts of every family, with the readings worked out by hand: p = 25.4/count, w = p - d, inch = 25.4 mm (definitions).
+"""Callouts of every family, with the readings worked out by hand.
+
+By definition p = 25.4/count, w = p - d, 1 in = 25.4 mm.
 
 Gauge diameters from Machinery's Handbook, sieve openings and wires from ISO 3310-1, grades from memory.
 """
@@ -186,12 +188,11 @@ SURE = [
     # filter cloth
     ("24x110 PDW 0.36/0.26", dutch(24, 110, 0.36, 0.26), None, "plain-dutch"),
     ("plain dutch weave 12x64, wire 0.60/0.40 mm, 304", dutch(12, 64, 0.6, 0.4), "304", "plain-dutch"),
-    ("200x1400 TDW .0028/.0016 316L 12 micron absolute", dutch(200, 1400, 0.0028 * INCH, 0.0016 * INCH), "316L", "twilled-dutch"),
+    ("200x1400 TDW .0028/.0016 316L 12 micron absolute", dutch(200, 1400, 0.07112, 0.04064), "316L", "twilled-dutch"),
     ("Köpertresse 165x1400 0,07/0,04 1.4404", dutch(165, 1400, 0.07, 0.04), "316L", "twilled-dutch"),
     ("Panzertresse 130x35 0,20/0,40", dutch(130, 35, 0.2, 0.4), None, "reverse-plain-dutch"),
     ("reps lisse 24x110 0,36/0,26 inox 316", dutch(24, 110, 0.36, 0.26), "316", "plain-dutch"),
     ("Kette 24 / Schuss 110, Draht 0,36/0,26, glatte Tresse", dutch(24, 110, 0.36, 0.26), None, "plain-dutch"),
-    ("Tresse 24x110 0,36/0,26 1.4401", dutch(24, 110, 0.36, 0.26), "316", "plain-dutch"),
     # sieves
     ("No. 100 sieve", opening(0.150, 0.100), None, None),
     ("US sieve #40", opening(0.425, 0.280), None, None),
@@ -222,6 +223,13 @@ SURE = [
     ("stee1 c1oth 20 mesh .016", inch(20, 0.016), "CS", None),
     ("plain vveave 40 mesh .010 316l", inch(40, 0.010), "316L", "plain"),
     ("20Ã—20 mesh Ã˜ 0,4 mm", counted(20, 0.4), None, None),
+    ("50 x 50 mm opening x 5 mm wire", opening(50.0, 5.0), None, None),
+    ("80-mesh, 0.0055-inch wire", inch(80, 0.0055), None, None),
+    ("1.6mm x 0.8mm stainless mesh", opening(1.6, 0.8), None, None),
+    ("30x250 PDW .010/.008 316 75µ", dutch(30, 250, 0.254, 0.2032), "316", "plain-dutch"),
+    ("60mesh0.0075wire304", inch(60, 0.0075), "304", None),
+    ("24 mesh/0.014\"", inch(24, 0.014), None, None),
+    ("#10 mesh .025", inch(10, 0.025), None, None),
     ("20×20×0·4 mm", counted(20, 0.4), None, None),
     ("20 mesh ∅0.4", counted(20, 0.4), None, None),
     # one figure said twice, agreeing
@@ -277,6 +285,8 @@ ASKED = [
     ("12 x 12", [only(p=INCH / 12)]),
     ("110x24 PDW .010/.015", [dutch(24, 110, 0.381, 0.254), dutch(110, 24, 0.254, 0.381)]),
     ("304 mesh .0014", [inch(304, 0.0014)]),
+    ("Tresse 24x110 0,36/0,26 1.4401", [dutch(24, 110, 0.36, 0.26)]),
+    ("635 mesh .0008 twilled dutch", [dutch(635, 635, 0.0008 * INCH, 0.0008 * INCH)]),
     # order of opening and wire
     ("0.16 x 0.25", [opening(0.25, 0.16)]),
     # contradictions: each pair of the three
@@ -351,7 +361,8 @@ OUTSIDE = [
     ("perforated 3 mm holes", "E_NOT_WOVEN"), ("knitted mesh 0.28 wire", "E_NOT_WOVEN"),
     ("Schweißgitter 12,7 x 12,7 x 1,6", "E_NOT_WOVEN"), ("treillis soudé 50 x 50 fil 4", "E_NOT_WOVEN"),
     ("malla electrosoldada 10 x 10", "E_NOT_WOVEN"), ("hexagonal netting 1/2 in", "E_NOT_WOVEN"),
-    ("nylon mesh 100 micron", "E_NOT_METAL"), ("60 mesh polyester", "E_NOT_METAL"), ("PA 66 Gewebe 50 µm", "E_NOT_METAL"),
+    ("nylon mesh 100 micron", "E_NOT_METAL"), ("60 mesh polyester", "E_NOT_METAL"),
+    ("PA 66 Gewebe 50 µm", "E_NOT_METAL"),
 ]  # fmt: skip
 
 
@@ -381,7 +392,7 @@ def test_a_line_that_leaves_the_wire_open_says_what_is_missing(text: str, cloth:
 
 
 LIMITS = [
-    ("at least 30 by 30 mesh, wire not less than 28 SWG", {"count_per_in": (30, None), "wire_mm": (0.0148 * INCH, None)}),
+    ("at least 30 by 30 mesh, wire not less than 28 SWG", {"count_per_in": (30, None), "wire_mm": (0.37592, None)}),
     ("not finer than 30 mesh", {"count_per_in": (None, 30)}),
     ("not coarser than 30 mesh", {"count_per_in": (30, None)}),
     ("less than 18 by 18 mesh", {"count_per_in": (None, 18)}),
@@ -400,6 +411,9 @@ LIMITS = [
     ("retain 100 micron", {"aperture_mm": (None, 0.1)}),
     ("must pass 2 mm", {"aperture_mm": (2, None)}),
     ("mass max 1.5 kg/m2, open area at least 40%", {"mass_kg_m2": (None, 1.5), "open_area_pct": (40, None)}),
+    ("w max 0,5 mm", {"aperture_mm": (None, 0.5)}),
+    ("20 mesh minimum", {"count_per_in": (20, None)}),
+    ("opening between 1 and 2 mm, wire at least 0.5", {"aperture_mm": (1, 2), "wire_mm": (0.5, None)}),
     ("at least 10 per cm", {"count_per_in": (INCH, None)}),
 ]  # fmt: skip
 

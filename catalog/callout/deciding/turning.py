@@ -90,6 +90,10 @@ def _dutch(draft: Draft, made: Combined, plain: Turned) -> list[Turned]:
     the order or the word is wrong.
     """
     warp, weft = made.warp.pitch, made.weft.pitch
+    if warp is not None and weft is not None and warp.mm == weft.mm:
+        draft.problem_at(
+            "E_NOT_UNDERSTOOD", "A Dutch weave has two counts, and one is stated: which is the other?", None
+        )
     if warp is None or weft is None or warp.mm == weft.mm:
         return [replace(plain, weave=draft.weave)]
     more_weft = weft.mm < warp.mm
@@ -116,7 +120,7 @@ def _swapped(made: Combined, named: Weave, other: Weave | None) -> list[Turned]:
 
 
 def _unnamed_dutch(made: Combined, plain: Turned, more_weft: bool) -> list[Turned]:
-    """'Dutch' alone: the packing of the weft tells plain from twilled, the counts tell reverse."""
+    """'Dutch' alone: a weft packed beyond 1.35 is twilled, one packed less may be either; the counts tell reverse."""
     if not more_weft:
         return [
             replace(plain, label="reverse plain Dutch", weave=Weave.REVERSE_PLAIN_DUTCH),
@@ -125,7 +129,11 @@ def _unnamed_dutch(made: Combined, plain: Turned, more_weft: bool) -> list[Turne
     weave = _by_packing(made)
     if weave is None:
         return [plain]
-    return [replace(plain, weave=weave, notes=(f"which Dutch weave isn't said; the weft packs as in {weave.words}",))]
+    note = f"which Dutch weave isn't said; the weft packs as in {weave.words}"
+    found = [replace(plain, label=weave.words, weave=weave, notes=(note,))]
+    if weave is Weave.PLAIN_DUTCH:
+        found.append(replace(plain, label="twilled Dutch", weave=Weave.TWILLED_DUTCH, likelihood=Likelihood.POSSIBLE))
+    return found
 
 
 def _by_packing(made: Combined) -> Weave | None:

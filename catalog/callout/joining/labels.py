@@ -42,13 +42,23 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
     ahead = next_figure(items, at + 1)
     behind_a_number = at > 0 and items[at - 1] is last and slot in ("mesh", "count")
     points_on = after is not None and after.text in EQUALS and not behind_a_number
-    if last is not None and not points_on and _accepts(last_of(last), slot) and not _fits_ahead(last, ahead, slot):
+    if last is not None and _is_opening_and_wire(last, slot):
+        label.taken = "kind of goods"
+    elif last is not None and not points_on and _accepts(last_of(last), slot) and not _fits_ahead(last, ahead, slot):
         _set(last, slot, backwards=True)
         label.taken = slot
     elif ahead is not None and _accepts(first_of(ahead), slot):
         _set(ahead, slot, backwards=False)
         label.taken = slot
         first_of(ahead).senses["label before"] = ""
+
+
+def _is_opening_and_wire(last: Item, slot: str) -> bool:
+    """'1.6 mm x 0.8 mm mesh': of two unlike lengths 'mesh' says but what the goods are."""
+    row = last.members
+    if slot != "mesh" or len(row) != 2 or not all(m.is_length and m.number and m.slot is None for m in row):
+        return False
+    return row[0].length().mm != row[1].length().mm
 
 
 def _fits_ahead(last: Item, ahead: Item | None, slot: str) -> bool:

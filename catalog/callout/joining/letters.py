@@ -25,7 +25,8 @@ def letters(items: list[Item]) -> list[Item]:
             continue
         if item.kind == "term" and not item.has("harmless") and not item.has("unit"):
             continue
-        leads = behind is not None and (behind.text in EQUALS or (behind.is_number and behind.glued and name != "wd"))
+        is_size = behind is not None and behind.is_number and behind.glued and name != "wd"
+        leads = behind is not None and (behind.text in EQUALS or behind.has("compare") or is_size)
         if leads and name in LETTERS:
             item.kind, item.senses = "term", {"slot": LETTERS[name], "letter": name}
         elif name in ("w", "wd", "l", "d") and before is not None and before.is_number and before.slot is None:

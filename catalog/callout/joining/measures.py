@@ -34,6 +34,9 @@ def _numbers_with_units(items: list[Item]) -> list[Item]:
         if behind.has("gauge") and not (behind.has("unit") and not behind.glued):
             number.unit, number.system = "gauge", behind.senses["gauge"]
             return join(number, behind, number), at + 2
+        hyphened = peek(items, at + 2) if behind.text == "-" and behind.glued else None
+        if hyphened is not None and hyphened.glued and hyphened.has("unit") and number.number is not None:
+            return _with_unit(items, at + 1, number, hyphened, hyphened.senses["unit"])
         unit = None if number.number is None else unit_of(behind)
         if unit is None or _is_preposition(items, at + 1):
             return _pieces(number, behind, at)

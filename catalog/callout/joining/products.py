@@ -1,5 +1,7 @@
 """Products: numbers that × or a stroke joins, each with the words beside it."""
 
+from itertools import pairwise
+
 from catalog.callout.joining.measuring import join, peek
 from catalog.callout.text.items import Item
 
@@ -95,7 +97,16 @@ def _chain(members: list[Item], joins: list[str]) -> Item:
                 break
             member.unit, member.system = last.unit, last.system
     _spread_right(members)
+    _spread_openings(members)
     return chain
+
+
+def _spread_openings(members: list[Item]) -> None:
+    """In '50 x 50 mm opening x 5 mm wire' the word behind the second number is the first one's too."""
+    for before, member in pairwise(members):
+        is_alike = before.is_count_like or before.unit == member.unit
+        if member.slot in ("aperture", "pitch") and before.slot is None and is_alike:
+            before.slot, before.unit = member.slot, before.unit or member.unit
 
 
 def _is_pair_of_gauges(members: list[Item], member: Item) -> bool:

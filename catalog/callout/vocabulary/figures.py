@@ -70,7 +70,7 @@ SIDES: dict[str, str] = {
 
 UNITS: dict[str, str] = {
     "mm": "mm, mms, millimeter, millimeters, millimetre, millimetres, milimetros, millimetri, millimetres, мм",
-    "um": "um, micron, microns, mic, mics, micrometer, micrometers, micrometre, micrometres, mikron, micra, micras, мкм",
+    "um": "um, u, micron, microns, mic, mics, micrometer, micrometers, micrometre, micrometres, mikron, micra, micras, мкм",
     "in": "in, inch, inches, ins, inch's, zoll, pouce, pouces, pulg, pulgada, pulgadas, pollice, pollici, дюйм",
     "thou": "thou, thous, mil, mils, thousandths, thousandth",
     "cm": "cm, centimeter, centimeters, centimetre, centimetres, см",
