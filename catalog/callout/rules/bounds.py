@@ -83,6 +83,9 @@ def _bound_range(draft: Draft, number: Item) -> None:
         return
     upper.unit, upper.system = upper.unit or number.unit, upper.system or number.system
     ends = sorted(v for n in (number, upper) for v in figures_of(n, figure)[0])
+    if not ends:
+        draft.problem("E_NOT_UNDERSTOOD", f"There is no gauge {number.text}.", number)
+        return
     limit(draft, KEYS[figure], LEAST, float(ends[0]))
     limit(draft, KEYS[figure], MOST, float(ends[-1]))
 

@@ -20,7 +20,7 @@ def mended(word: str) -> str | None:
 
     Needs a digit (or the shape of 10, 100, 1000), so that 'o' and 'Il' stay words; 316l is an alloy's name.
     """
-    if LOW_CARBON.fullmatch(word) or not any(letter in "OolISB" for letter in word.lstrip("Tt")):
+    if word[-1] in "SB" or LOW_CARBON.fullmatch(word) or not any(letter in "OolISB" for letter in word.lstrip("Tt")):
         return None
     if not any(c.isdecimal() for c in word) and not BLIND.fullmatch(word):
         return None

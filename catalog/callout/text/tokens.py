@@ -13,11 +13,17 @@ POINTED = re.compile(r"(?<![\w.])0?\.\d")
 """A decimal point: a comma between digits then parts the items of a list,
 unless decimals with a comma are there too.
 """
+PARTED = re.compile(r"[^\W\d],[^\W_]|,\.\d")
 COMMAED = re.compile(r"(?<![\d.,])0,\d")
 BARE_STEEL = re.compile(r"\d\.\d{4}")
 STEEL_GROUPS = re.compile(r"1\.4|2\.4|1\.0313|1\.1260|3\.70")
 MEASURED = re.compile(r"\s?(?:[muc]m\b|in\b|inch|\"|thou|x\s?\d|per\b|je\b|/\s?(?:cm|in)|mesh|%|kg)", re.IGNORECASE)
 LETTERS = re.compile(r"[^\W\d_]+")
+
+
+def is_list(text: str) -> bool:
+    """True where commas part items without a space, and decimals have points: 'SST,304,40X40,.010'."""
+    return bool(POINTED.search(text) and PARTED.search(text)) and not COMMAED.search(text)
 
 
 @dataclass(frozen=True, slots=True)
@@ -36,7 +42,7 @@ class Line:
 def tokenize(text: str) -> list[Item]:
     """Cut repaired *text* into items."""
     row = atoms(fold(text))
-    line = Line(text, capitals(text), row, bool(POINTED.search(text)) and not COMMAED.search(text))
+    line = Line(text, capitals(text), row, is_list(text))
     items: list[Item] = []
     index = 0
     while index < len(row):
