@@ -200,6 +200,9 @@ SURE = [
     ("BS 410 52 mesh", opening(0.300, 0.200), None, None),
     ("ISO 3310-1, 0.5 mm", opening(0.5, 0.315), None, None),
     ("sieve No. 10 2.0/0.9", opening(2.0, 0.9), None, None),
+    ("test sieve No. 200, 75µm, ISO 3310-1", opening(0.075, 0.050), None, None),
+    ("mesh 100 sieve 150 micron", opening(0.150, 0.100), None, None),
+    ("20 mesh .016 304 disc 12\" dia", inch(20, 0.016), "304", None),
     ("60 mesh 250 micron", counted(60, INCH / 60 - 0.25), None, None),
     ("150 mesh 100 micron", counted(150, INCH / 150 - 0.1), None, None),
     # grades, from memory
@@ -287,6 +290,10 @@ ASKED = [
     ("304 mesh .0014", [inch(304, 0.0014)]),
     ("Tresse 24x110 0,36/0,26 1.4401", [dutch(24, 110, 0.36, 0.26)]),
     ("635 mesh .0008 twilled dutch", [dutch(635, 635, 0.0008 * INCH, 0.0008 * INCH)]),
+    # per inch or per centimetre
+    ("n=20 d=0,2", [counted(20, 0.2), pitch(0.5, 0.2)]),
+    ("Maschenzahl 24, Draht 0,16", [counted(24, 0.16), pitch(10 / 24, 0.16)]),
+    ("maglia 2x2 filo 0,5 inox", [counted(2, 0.5), opening(2.0, 0.5), pitch(2.0, 0.5)]),
     # order of opening and wire
     ("0.16 x 0.25", [opening(0.25, 0.16)]),
     # contradictions: each pair of the three

@@ -47,10 +47,11 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
     elif last is not None and not points_on and _accepts(last_of(last), slot) and not _fits_ahead(last, ahead, slot):
         _set(last, slot, backwards=True)
         label.taken = slot
+        last_of(last).senses["named"] = label.text.lower()
     elif ahead is not None and _accepts(first_of(ahead), slot):
         _set(ahead, slot, backwards=False)
         label.taken = slot
-        first_of(ahead).senses["label before"] = ""
+        first_of(ahead).senses |= {"label before": "", "named": label.text.lower()}
 
 
 def _is_opening_and_wire(last: Item, slot: str) -> bool:

@@ -4,6 +4,7 @@ from catalog.callout.joining.count_units import counted_over_a_length, counts_wi
 from catalog.callout.joining.gauge_numbers import gauges_named_first
 from catalog.callout.joining.measuring import join, peek, rewrite, unit_of
 from catalog.callout.text.items import Item
+from catalog.callout.vocabulary.materials import BARE_NUMBERS
 from catalog.units import parse_number
 
 MOST_PIECES = 100_000
@@ -68,8 +69,10 @@ def _is_preposition(items: list[Item], at: int) -> bool:
 
 
 def _pieces(number: Item, behind: Item, at: int) -> tuple[Item, int] | None:
-    """'6 pcs', '2 rolls', '1 off': a whole number before a word for goods."""
+    """'6 pcs', '2 rolls', '1 off': a whole number before a word for goods; '304 disc' names the steel."""
     if not behind.has("form") or not number.number or not number.number.is_integer or number.number.value > MOST_PIECES:
+        return None
+    if number.number.value in BARE_NUMBERS and behind.senses["form"] != "piece":
         return None
     number.unit, number.system = "pieces", behind.senses["form"]
     return join(number, behind, number), at + 2

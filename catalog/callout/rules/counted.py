@@ -1,11 +1,16 @@
 """Counts by their unit: per inch, per centimetre, per square, over a length."""
 
+import re
+
 from catalog.callout.rules.claims import count_claim
-from catalog.callout.rules.draft import Draft
+from catalog.callout.rules.draft import USUAL, Claim, Draft, Option
 from catalog.callout.rules.taking import said_again, take, with_twin
 from catalog.callout.text.items import Item
 
 COUNT_UNITS = ("/in", "/cm", "/in2", "/cm2", "mesh sign", "per length")
+
+PER_WHAT = re.compile(r"n$|masch|faden|nombre|numero", re.IGNORECASE)
+"""Words for a count that says not per what: n of a formula, Maschenzahl, nombre de mailles."""
 
 
 def count_figures(draft: Draft) -> None:
@@ -23,8 +28,19 @@ def count_figures(draft: Draft) -> None:
             row = with_twin(members, row[0])
         if claim := count_claim(row, row[-1].unit if row[-1].unit != "M" else None):
             take(row, "count")
-            draft.claims.append(claim)
+            if all(n.unit is None for n in row) and any(PER_WHAT.match(n.senses.get("named", "")) for n in row):
+                draft.choices.append(_per_inch_or_cm(row, claim))
+            else:
+                draft.claims.append(claim)
             said_again(draft, "count", row)
+
+
+def _per_inch_or_cm(row: list[Item], claim: Claim) -> list[Option]:
+    """'n = 20' and 'Maschenzahl 20' count per inch or per centimetre, as their author is used to."""
+    options = [Option(f"{row[0].text} per inch", (claim,), USUAL, sense="per inch or per cm")]
+    if other := count_claim(row, "/cm"):
+        options.append(Option(f"{row[0].text} per cm", (other,), USUAL, sense="per inch or per cm"))
+    return options
 
 
 def _metres(draft: Draft, number: Item) -> bool:

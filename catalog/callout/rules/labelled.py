@@ -17,7 +17,7 @@ def groups(draft: Draft, wanted: str) -> list[list[Item]]:
     found: list[list[Item]] = []
     for item in draft.items:
         members = item.members if item.kind == "chain" else [item] if item.is_number else []
-        row = [m for m in members if not m.taken and m.slot == wanted]
+        row = [m for m in members if not m.taken and m.slot == wanted and m.number]
         if row:
             found.append(row[:2])
     return found

@@ -1,5 +1,6 @@
 """The word mesh: a count beside a whole number, an opening or a pitch beside a length."""
 
+import re
 from dataclasses import replace
 
 from catalog.callout.rules.claims import count_claim, length_claim
@@ -13,6 +14,8 @@ from catalog.callout.vocabulary.materials import BARE_NUMBERS
 from catalog.cloth import Rating
 from catalog.reference import grades
 from catalog.units import MM_PER_INCH, Length
+
+SOUTHERN = re.compile(r"mall|magli", re.IGNORECASE)
 
 
 def mesh_figures(draft: Draft) -> None:
@@ -98,6 +101,9 @@ def _mesh_counts(draft: Draft, row: list[Item]) -> None:
     said_again(draft, "count", row)
     number = row[0]
     label = f"{' x '.join(n.text for n in row)} per inch"
+    if _is_southern(draft):
+        draft.choices.append(_count_or_opening(row, label, claim))
+        return
     counted = Option(label, (claim,), USUAL, sense="sieve or count")
     sieve = sieve_option(draft, number) if len(row) == 1 else None
     if (
@@ -121,6 +127,20 @@ def _mesh_counts(draft: Draft, row: list[Item]) -> None:
         )
     else:
         draft.claims.append(claim)
+
+
+def _is_southern(draft: Draft) -> bool:
+    """True where the mesh is 'malla' or 'maglia', which counts per inch or is an opening in millimetres."""
+    return any(SOUTHERN.match(item.text) for item in draft.items if item.has("slot"))
+
+
+def _count_or_opening(row: list[Item], label: str, claim: Claim) -> list[Option]:
+    options = [Option(label, (claim,), USUAL, sense="count or opening")]
+    for slot, name in (("aperture", "opening"), ("pitch", "pitch")):
+        written = " x ".join(n.text for n in row)
+        claims = (length_claim(slot, row, "mm"),)
+        options.append(Option(f"{written} mm {name}", claims, POSSIBLE, is_inferred=True, sense="count or opening"))
+    return options
 
 
 def _with_custom(counted: Option, wire_in: object) -> Option:

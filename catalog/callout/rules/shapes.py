@@ -78,7 +78,7 @@ def _single(draft: Draft, number: Item) -> None:
         draft.choices.append(gauge_options(draft, [number]))
     elif shape == "W" and not draft.has_count and not (draft.has_slot("aperture") or draft.has_slot("pitch")):
         whole_alone(draft, number)
-    elif shape in "DLF" and draft.has_count:
+    elif shape in "DLF" and (draft.has_count or any(n.taken == "count" for n in draft.all_numbers())):
         if number.is_length and float(number.length().mm) >= 100:
             return
         if not (knows_wire(draft) and states_opening(draft)):
