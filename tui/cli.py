@@ -77,6 +77,13 @@ def _answer(words: list[str]) -> int:
     except BrokenPipeError:
         _silence_stdout()
         return ExitCode.DONE
+    except Exception as error:  # a fault of ours: one sentence, the whole of it in the log
+        if setting is not None and setting.verbose:
+            logging.getLogger("crosscloth").exception("unforeseen")
+        where = f"{type(error).__name__}: {error}"
+        return _fail(
+            CrossclothError(f"Something went wrong that was not foreseen ({where}); --verbose logs it."), setting
+        )
 
 
 def _fail(error: CrossclothError, setting: Setting | None) -> int:

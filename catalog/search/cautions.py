@@ -37,8 +37,7 @@ CAUTIONS = (
     Caution(
         "food contact",
         ("food", "dairy", "milk", "pharma", "lebensmittel", "aliment"),
-        "Food or pharmaceutical contact: alloy, finish and traceability are prescribed; have the certificate "
-        "checked.",
+        "Food or pharmaceutical contact: alloy, finish and traceability are prescribed; have the certificate checked.",
     ),
     Caution(
         "pressure",

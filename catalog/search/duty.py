@@ -17,6 +17,7 @@ from catalog.search.candidate import Finding
 from catalog.search.comparison import Comparison
 from catalog.target import Duty, Purpose
 
+WAYS = ("warp", "weft")
 FLOW_SOURCE = "Armour and Cannon 1968; round-wire screen: Blevins 1984; clean cloth only"
 STRENGTH_SOURCE = "section times the tensile range of the alloy table; no load to design by"
 
@@ -151,6 +152,7 @@ def _flow_finding(asked: Construction, offered: Construction, duty: Duty) -> Ite
 
 
 def _strength_finding(asked: Construction, offered: Construction) -> Iterator[Finding]:
+    yield Finding("stiffness", True, _stiffness_words(asked, offered), "d⁴/p, for comparing cloths only")
     before, after = breaking_loads(asked), breaking_loads(offered)
     if after is None:
         text = f"No tensile range is on record for {offered.alloy or 'this alloy'}: only the sections are compared."
@@ -164,3 +166,12 @@ def _strength_finding(asked: Construction, offered: Construction) -> Iterator[Fi
         asked_words = zip(("warp", "weft"), before, strict=True)
         said = "; asked: " + "; ".join(f"{name} {low:.3g} to {high:.3g} kN/m" for name, (low, high) in asked_words)
     yield Finding("breaking load", True, f"Breaking load per width: {words}{said}.", STRENGTH_SOURCE)
+
+
+def _stiffness_words(asked: Construction, offered: Construction) -> str:
+    """How section and stiffness change, each way."""
+    said = []
+    for name, one, other in zip(WAYS, (asked.warp, asked.weft), (offered.warp, offered.weft), strict=True):
+        sides = float(one.pitch_mm), float(one.wire_mm), float(other.pitch_mm), float(other.wire_mm)
+        said.append(f"{name} × {strength.section_ratio(*sides):.2f} and × {strength.stiffness_ratio(*sides):.2f}")
+    return f"Metal section and stiffness index against the asked: {'; '.join(said)}."

@@ -5,6 +5,7 @@ from dataclasses import dataclass, replace
 from math import sqrt
 
 from catalog.cloth import Cloth
+from catalog.search.distance import FIGURES as GETTERS
 from catalog.search.reader import Filters, Range, Reader
 
 RELAXED = 0.30
@@ -16,6 +17,7 @@ FIGURES = {
     "open_area_pct": ("open_area_pct",),
     "mass_kg_m2": ("mass_kg_m2",),
     "thickness_mm": ("thickness_mm",),
+    "rating_um": ("rating_um",),
 }
 
 
@@ -122,23 +124,13 @@ def shortfalls(cloth: Cloth, limits: Mapping[str, Range]) -> tuple[Short, ...]:
     """By how much *cloth* misses each limit; empty where it is inside all. Limits are inclusive."""
     found = []
     for limit, (low, high) in limits.items():
-        values = [value for name in FIGURES[limit] if (value := _figure(cloth, name)) is not None]
+        values = [value for name in FIGURES[limit] if (value := GETTERS[name](cloth)) is not None]
         over = max((value - high for value in values), default=0.0) if high is not None else 0.0
         under = max((low - value for value in values), default=0.0) if low is not None else 0.0
         by = max(over, under)
         if by > 1e-9:
             found.append(Short(limit, by))
     return tuple(found)
-
-
-def _figure(cloth: Cloth, name: str) -> float | None:
-    made = cloth.construction
-    if name == "warp_wire_mm":
-        return float(made.warp.wire_mm)
-    if name == "weft_wire_mm":
-        return float(made.weft.wire_mm)
-    value: float | None = getattr(cloth.figures, name)
-    return value
 
 
 def window(limits: Mapping[str, Range]) -> Window | None:

@@ -29,6 +29,7 @@ def add(commands: "argparse._SubParsersAction[argparse.ArgumentParser]", **rest:
     parser.add_argument("--thickness", metavar="FROM..TO UNIT")
     parser.add_argument("--min-open-area", type=float, metavar="PCT")
     parser.add_argument("--max-mass", type=float, metavar="KG_M2")
+    parser.add_argument("--rating", metavar="FROM..TO UNIT", help="filter cloth by its rating: '30..50um'")
     parser.add_argument("--alloy", metavar="NAME", help="an alloy, a family ('stainless'), several with commas")
     parser.add_argument("--weave", metavar="WEAVE")
     parser.add_argument("--max-price", metavar="PER_M2", help="offered at no more, in the offer's currency: 24.50")
@@ -125,6 +126,9 @@ def limits_of(arguments: argparse.Namespace) -> "dict[str, Range]":
         text = getattr(arguments, name)
         if text is not None:
             limits[f"{name}_mm"] = range_of(text, name)
+    if arguments.rating is not None:
+        low, high = range_of(arguments.rating, "rating")
+        limits["rating_um"] = (None if low is None else low * 1000, None if high is None else high * 1000)
     if arguments.min_open_area is not None:
         limits["open_area_pct"] = (_sensible(arguments.min_open_area, "an open area", 100), None)
     if arguments.max_mass is not None:

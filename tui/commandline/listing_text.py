@@ -16,6 +16,7 @@ LABELS = {
     "open_area_pct": ("open area", "points"),
     "mass_kg_m2": ("mass", "kg/m²"),
     "thickness_mm": ("thickness", "mm"),
+    "rating_um": ("rating", "µm"),
 }
 
 
