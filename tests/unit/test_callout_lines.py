@@ -219,6 +219,10 @@ SURE = [
     ("30M x .012 x 1.22M x 30M", inch(30, 0.012), None, None),
     ("P/N 44-1027, 60 mesh .0075 304", inch(60, 0.0075), "304", None),
     ("Art.-Nr. 000123 Gewebe 0,25/0,16 1.4404", opening(0.25, 0.16), "316L", None),
+    ("MESH WIRE BRASS 60X60 .0075 36\"", inch(60, 0.0075), None, None),
+    ("GEWEBE 1.4404 0,25X0,16 1000MM", opening(0.25, 0.16), "316L", None),
+    ("WIRE CLOTH|SS316|40X40|.010|48IN|PLAIN", inch(40, 0.010), "316", "plain"),
+    ("60 mesh +/- 2 mesh .0075 wire", inch(60, 0.0075), None, None),
     # scanner's and encoding's damage
     ("8O mesh .OO55 3O4", inch(80, 0.0055), "304", None),
     ("1OO rnesh .0O45 T3l6", inch(100, 0.0045), "316", None),

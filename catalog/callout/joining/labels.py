@@ -42,16 +42,29 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
     ahead = next_figure(items, at + 1)
     behind_a_number = at > 0 and items[at - 1] is last and slot in ("mesh", "count")
     points_on = after is not None and after.text in EQUALS and not behind_a_number
-    if last is not None and _is_opening_and_wire(last, slot):
+    if last is not None and (_is_opening_and_wire(last, slot) or _is_repeated(items, at, last, slot)):
         label.taken = "kind of goods"
     elif last is not None and not points_on and _accepts(last_of(last), slot) and not _fits_ahead(last, ahead, slot):
         _set(last, slot, backwards=True)
         label.taken = slot
         last_of(last).senses["named"] = label.text.lower()
-    elif ahead is not None and _accepts(first_of(ahead), slot):
+    elif ahead is not None and _accepts(first_of(ahead), slot) and _may_lead(ahead, slot):
         _set(ahead, slot, backwards=False)
         label.taken = slot
         first_of(ahead).senses |= {"label before": "", "named": label.text.lower()}
+
+
+def _is_repeated(items: list[Item], at: int, last: Item, slot: str) -> bool:
+    """'60 mesh ±2 mesh': the word stands behind its own number again."""
+    return items[at - 1] is last and last_of(last).slot == slot and last_of(last).tolerance is not None
+
+
+def _may_lead(ahead: Item, slot: str) -> bool:
+    """'mesh .0075' and 'wire 60 x 60' name no figures: a count isn't below one, and a wire isn't a pair of counts."""
+    first = first_of(ahead)
+    if slot == "mesh":
+        return first.is_length or first.number is None or first.number.value >= 1 or first.number.kind == "fraction"
+    return not (slot == "wire" and len(ahead.members) > 1 and all(m.is_count_like for m in ahead.members[:2]))
 
 
 def _is_opening_and_wire(last: Item, slot: str) -> bool:

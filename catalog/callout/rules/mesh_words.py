@@ -22,7 +22,7 @@ def mesh_figures(draft: Draft) -> None:
     """'60 mesh' counts per inch; '1/4 in mesh' and '6 mm mesh' are an opening or a pitch, and nobody can tell which."""
     for item in draft.items:
         members = item.members if item.kind == "chain" else [item] if item.is_number else []
-        row = [m for m in members if not m.taken and m.slot == "mesh"][:2]
+        row = [m for m in members if not m.taken and m.slot == "mesh" and m.number][:2]
         if not row:
             continue
         if draft.is_slotted and (pair := _slot_sides(item, row)):

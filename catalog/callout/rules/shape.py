@@ -3,6 +3,9 @@
 from catalog.callout.rules.draft import Draft
 from catalog.callout.text.items import Item
 
+THICKEST_MM = 30
+"""A length from here on is no wire beside an opening, but a size."""
+
 
 def shape_of(numbers: list[Item]) -> str:
     """One letter a number: 'WWD' for 60 x 60 x .0075."""
@@ -32,5 +35,5 @@ def has_free_wire(draft: Draft, numbers: list[Item]) -> bool:
     """True where a decimal, a gauge or a named wire stands beside the product."""
     others = [n for n in draft.numbers() if n not in numbers and n.slot is None]
     return knows_wire(draft) or any(
-        shape_of([n]) in "DG" or (n.is_length and n.unit in ("mm", "um", "thou", "in")) for n in others
+        shape_of([n]) in "DG" or (n.is_length and n.length().mm < THICKEST_MM) for n in others
     )
