@@ -15,7 +15,7 @@ from catalog.version import VERSION
 from tui.commandline.options import Setting, common, setting_of, terminal_is_dumb
 from tui.exit_codes import ExitCode, complain, exit_code, say
 
-COMMANDS = ("read", "match", "list", "show", "identify", "receipt", "tables", "audit", "store")
+COMMANDS = ("read", "match", "list", "show", "identify", "receipt", "cut", "sheet", "tables", "audit", "store")
 MODULES = {"list": "listing"}
 
 
