@@ -13,9 +13,9 @@ from catalog.errors import (
 )
 
 EXCERPT = 72
-CONTROL = {c: " " for c in (*range(0x20), 0x7F, *range(0x80, 0xA0))}
+CONTROL = dict.fromkeys((*range(0x20), 0x7F, *range(0x80, 0xA0)), " ")
 STEERING = dict.fromkeys((*range(0x200B, 0x2010), *range(0x202A, 0x202F), *range(0x2060, 0x206A), 0xFEFF))
-SURROGATES = {c: 0xFFFD for c in range(0xD800, 0xE000)}
+SURROGATES = dict.fromkeys(range(0xD800, 0xE000), 0xFFFD)
 HARMLESS = CONTROL | STEERING | SURROGATES
 
 
