@@ -99,7 +99,7 @@ def _vulgar(found: re.Match[str], text: str) -> Number | None:
 
 
 def _thousands(text: str) -> Number:
-    point = "." if text.rfind(".") > text.rfind(",") else ","
+    point = "." if text.rfind(".") > text.rfind(",") or "." not in text else ","
     plain = text.replace("," if point == "." else ".", "").replace(",", ".")
     decimals = len(plain.partition(".")[2])
     return Number(Fraction(plain), Fraction(1, 2 * 10**decimals), "decimal" if decimals else "integer", text)

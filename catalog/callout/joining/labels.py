@@ -6,6 +6,9 @@ from catalog.callout.joining.neighbours import EQUALS, first_of, last_of, next_f
 from catalog.callout.joining.separators import is_separator
 from catalog.callout.text.items import Item
 
+LARGEST_MM = {"wire": 30, "thickness": 60, "aperture": 150, "pitch": 180, "mesh": 150}
+"""Beyond these a length is a size, not a figure of the cloth."""
+ROLL_WIDTHS_IN, ROLL_LENGTHS_FT = range(10, 121), (25, 30, 50, 75, 100, 150, 200, 300)
 FITS = {
     "open_area": ("%", None),
     "mass": ("kg/m2", "g/m2", "lb/ft2"),
@@ -48,7 +51,7 @@ def _give(items: list[Item], at: int, label: Item, last: Item | None) -> None:
         _set(last, slot, backwards=True)
         label.taken = slot
         last_of(last).senses["named"] = label.text.lower()
-    elif ahead is not None and _accepts(first_of(ahead), slot) and _may_lead(ahead, slot):
+    elif ahead is not None and _accepts(first_of(ahead), slot) and _may_lead(items, ahead, slot):
         _set(ahead, slot, backwards=False)
         label.taken = slot
         first_of(ahead).senses |= {"label before": "", "named": label.text.lower()}
@@ -59,9 +62,21 @@ def _is_repeated(items: list[Item], at: int, last: Item, slot: str) -> bool:
     return items[at - 1] is last and last_of(last).slot == slot and last_of(last).tolerance is not None
 
 
-def _may_lead(ahead: Item, slot: str) -> bool:
-    """'mesh .0075' and 'wire 60 x 60' name no figures: a count isn't below one, and a wire isn't a pair of counts."""
+def _may_lead(items: list[Item], ahead: Item, slot: str) -> bool:
+    """'mesh .0075' and 'wire 60 x 60' name no figures: a count isn't below one, and a wire isn't a pair of counts.
+
+    In 'mesh 0.05 mm wire' the length has its own word.
+    """
     first = first_of(ahead)
+    behind = peek(items, items.index(ahead) + 1)
+    if slot == "mesh" and first.is_length and behind is not None and behind.has("slot"):
+        return False
+    if (
+        slot == "mesh"
+        and is_roll_like(ahead)
+        and any(i.senses.get("slot") == "mesh" for i in items[items.index(ahead) :])
+    ):
+        return False
     if slot == "mesh":
         return first.is_length or first.number is None or first.number.value >= 1 or first.number.kind == "fraction"
     return not (slot == "wire" and len(ahead.members) > 1 and all(m.is_count_like for m in ahead.members[:2]))
@@ -76,10 +91,35 @@ def _is_opening_and_wire(last: Item, slot: str) -> bool:
 
 
 def _fits_ahead(last: Item, ahead: Item | None, slot: str) -> bool:
-    """'0.5 mm wire 0.2 mm': between two lengths the wire is the thinner."""
-    if slot != "wire" or ahead is None or not ahead.is_number or ahead.slot or not ahead.is_length:
+    """True where the number behind a label is its number, though one without label stands before it.
+
+    '0.5 mm wire 0.2 mm': between two lengths the wire is the thinner; '36X100 opening 2 mm': a roll is no opening.
+    """
+    if ahead is None or slot not in LARGEST_MM or first_of(ahead).slot or not _accepts(first_of(ahead), slot):
         return False
-    return last_of(last).is_length and ahead.length().mm < last_of(last).length().mm
+    first, before = first_of(ahead), last_of(last)
+    if _is_a_size(before, slot) and not _is_a_size(first, slot):
+        return True
+    if slot not in ("wire", "aperture", "pitch"):
+        return False
+    if is_roll_like(last) or (before.is_count_like and first.is_length):
+        return True
+    if slot != "wire" or not ahead.is_number or not ahead.is_length:
+        return False
+    return before.is_length and ahead.length().mm < before.length().mm
+
+
+def _is_a_size(number: Item, slot: str) -> bool:
+    """True for a length beyond what the figure can be."""
+    return number.is_length and number.length().mm > LARGEST_MM[slot]
+
+
+def is_roll_like(item: Item) -> bool:
+    """True for '36X100' and '48 x 50': inches by feet, as rolls are sold."""
+    if len(item.members) != 2 or not all(m.is_count_like and m.number for m in item.members):
+        return False
+    width, length = (m.number.value for m in item.members if m.number)
+    return width in ROLL_WIDTHS_IN and length in ROLL_LENGTHS_FT
 
 
 def _accepts(number: Item, slot: str) -> bool:

@@ -5,7 +5,7 @@ from catalog.callout.joining.gauge_numbers import gauges_named_first
 from catalog.callout.joining.measuring import join, peek, rewrite, unit_of
 from catalog.callout.text.items import Item
 from catalog.callout.vocabulary.materials import BARE_NUMBERS
-from catalog.units import parse_number
+from catalog.units import Number, parse_number
 
 MOST_PIECES = 100_000
 
@@ -20,6 +20,9 @@ def measured(items: list[Item]) -> list[Item]:
         _numbers_behind_signs,
     ):
         items = rule(items)
+    for item in items:
+        if item.unit == "aught":
+            item.kind, item.unit = "word", None
     return items
 
 
@@ -38,7 +41,7 @@ def _numbers_with_units(items: list[Item]) -> list[Item]:
         hyphened = peek(items, at + 2) if behind.text == "-" and behind.glued else None
         if hyphened is not None and hyphened.glued and hyphened.has("unit") and number.number is not None:
             return _with_unit(items, at + 1, number, hyphened, hyphened.senses["unit"])
-        unit = None if number.number is None else unit_of(behind)
+        unit = None if number.unit == "aught" else unit_of(behind)
         if unit is None or _is_preposition(items, at + 1):
             return _pieces(number, behind, at)
         return _with_unit(items, at, number, behind, unit)
@@ -89,7 +92,7 @@ def _numbers_behind_signs(items: list[Item]) -> list[Item]:
         while (item := peek(items, behind)) and item.text in ".:°":
             behind += 1
         number = peek(items, behind)
-        if not number or not number.is_number or number.number is None or not number.number.is_integer:
+        if not number or not number.is_number or number.number is None or not _is_designating(number.number):
             return None
         if number.unit is None:
             number.unit = "designation"
@@ -97,6 +100,11 @@ def _numbers_behind_signs(items: list[Item]) -> list[Item]:
         return join(sign, number, number), behind + 1
 
     return rewrite(items, rule)
+
+
+def _is_designating(number: Number) -> bool:
+    """True for what can be a sieve's number: whole, or 2 1/2 and 3 1/2."""
+    return number.is_integer or (number.kind == "fraction" and number.value > 1)
 
 
 def number_from(text: str) -> Item:

@@ -33,7 +33,7 @@ def _joined(item: Item | None, words: tuple[str, ...]) -> bool:
 
 def _is_label(items: list[Item], at: int) -> bool:
     item = peek(items, at)
-    return item is not None and item.has("slot")
+    return item is not None and item.senses.get("slot") in ("mesh", "count", "aperture", "pitch", "wire")
 
 
 def _range(items: list[Item], at: int, low: Item | None, high: Item | None, end: int) -> tuple[Item, int] | None:
@@ -41,8 +41,7 @@ def _range(items: list[Item], at: int, low: Item | None, high: Item | None, end:
         return None
     if low.unit not in (None, high.unit) or high.bound or high.unit in ("pieces", "designation"):
         return None
-    low.unit, low.system = high.unit, high.system
     if not low.number.value < high.number.value or is_times(peek(items, end)):
         return None
-    low.upto = high
+    low.unit, low.system, low.upto = high.unit, high.system, high
     return join(items[at], high, low), end

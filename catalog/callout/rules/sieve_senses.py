@@ -16,9 +16,9 @@ OLD_OPENINGS_SHARE = Fraction(2, 100)
 
 def sieve_option(draft: Draft, number: Item, likelihood: Likelihood = USUAL) -> Option | None:
     """The reading of a number as a sieve's; British where BS 410 is named. None where no sieve has it."""
-    if number.number is None or not number.number.is_integer:
+    if number.number is None or not (number.number.is_integer or number.number.kind == "fraction"):
         return None
-    name = number.number.written.lstrip("0")
+    name = number.number.written.lstrip("0").replace("-", " ")
     british = any("410" in s for s in draft.standards)
     opening = opening_mm(int(number.number.value)) if british else None
     sieve = sieves.by_opening(opening) if opening else None if british else sieves.by_number(name)

@@ -1,6 +1,7 @@
 """Numbers as they are written: decimals with point or comma, fractions of the inch, thousands, feet and inches."""
 
 import re
+from fractions import Fraction
 from math import gcd
 
 from catalog.callout.text.items import Item
@@ -39,7 +40,8 @@ def numeral(text: str, start: int, lists: bool) -> Item | None:
     if lists and "," in written[1:] and not (GROUP.fullmatch(written) and SIZE_UNIT.match(text, found.end())):
         written = written.partition(",")[0]
     if kind == "aught":
-        return Item("number", written, start, found.end(), unit="aught")
+        number = Number(Fraction(0), Fraction(0), "fraction", written)
+        return Item("number", written, start, found.end(), unit="aught", number=number)
     number = parse_number(written)
     if number is None:
         return Item("word", written, start, start + len(written))
