@@ -61,7 +61,8 @@ def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> 
     """Find the nearest equivalents of a callout. Raises InputError where no reading survives."""
     understanding = callout.read(request.text)
     readings = _taken(understanding, request.reading) or readings_to_match(understanding)
-    targets = tuple(_aim(reading, request, rules) for reading in readings)
+    metal_is_open = any(p.code == "E_MATERIAL" for p in understanding.problems)
+    targets = tuple(replace(_aim(reading, request, rules), alloy_is_open=metal_is_open) for reading in readings)
     judged = [(target, _judge_all(target, reader, request, rules)) for target in targets]
     any_will_do = understanding.status is not Status.ASK
     merged = _merge(judged, any_will_do, rules)
@@ -69,12 +70,19 @@ def match(request: Request, reader: Reader, rules: HouseRules = HOUSE_RULES) -> 
     lots = reader.lots([assessed.candidate.cloth.id for assessed in shown])
     described = tuple(describe(one, lots.get(one.candidate.cloth.id, ()), rules) for one in shown)
     said = dict.fromkeys(line for target in targets for line in cautions(target, request.text))
-    return Answer(request, understanding, targets, described, understanding.question, tuple(said))
+    return Answer(request, understanding, targets, described, _question(understanding), tuple(said))
 
 
 def _taken(understanding: Understanding, label: str | None) -> tuple[Reading, ...]:
     """The surviving reading that was answered with; none where nothing was answered."""
     return tuple(r for r in understanding.surviving if r.label == label)[:1]
+
+
+def _question(understanding: Understanding) -> str | None:
+    """The one question; where there is none and an answer is needed, what is wrong."""
+    if understanding.question is None and understanding.status is Status.ASK and understanding.problems:
+        return understanding.problems[0].message
+    return understanding.question
 
 
 def readings_to_match(understanding: Understanding) -> tuple[Reading, ...]:

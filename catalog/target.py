@@ -69,6 +69,8 @@ class Target:
     """None where no aperture was asked for."""
     alloy_rule: str = "same"
     """'same' (the alloy ladder decides), 'any', or the name of another alloy to ask for."""
+    alloy_is_open: bool = False
+    """True where the text contradicts itself on the metal: nobody can say whether an alloy will do."""
     weave: Weave | None = None
     limits: Limits = field(default_factory=dict)
     need: Need | None = None

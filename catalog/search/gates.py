@@ -50,6 +50,10 @@ def alloy_gate(c: Comparison) -> Finding | None:
     offered = c.made.alloy
     if c.target.alloy_rule == "any":
         return Finding("alloy", True, f"Any alloy was allowed; this is {_named(offered)}.")
+    if asked is None and c.target.alloy_is_open:
+        return Finding(
+            "alloy", None, f"The text contradicts itself on the metal: ask which; this is {_named(offered)}."
+        )
     if asked is None and c.target.reading.material is not None:
         return _family_finding(c.target.reading.material, offered)
     if asked is None:

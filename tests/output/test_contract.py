@@ -287,3 +287,16 @@ def test_where_the_store_is_follows_option_then_environment(
     assert main(["--store", str(tmp_path / "option.sqlite3"), "store", "where"]) == 0
     assert "option.sqlite3" in capsys.readouterr().out
     assert not list(tmp_path.iterdir())
+
+
+def test_a_text_that_names_two_metals_is_same_to_nothing(crosscloth: Program) -> None:
+    document = crosscloth("match", "20 mesh .016 304 or 316", "--json").json
+    assert document["question"]
+    assert not [c["name"] for c in document["candidates"] if c["verdict"] in ("same", "interchangeable")]
+
+
+def test_a_bare_bronze_matches_no_other_metal(crosscloth: Program) -> None:
+    document = crosscloth("match", "16 x 18 mesh .011 bronze", "--json").json
+    fits = [c["alloy"] for c in document["candidates"] if c["verdict"] in ("same", "interchangeable", "near-safe")]
+    assert not fits
+    assert any(c["alloy"] == "CuSn5" and c["verdict"] == "cannot-say" for c in document["candidates"])
