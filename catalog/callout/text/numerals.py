@@ -29,6 +29,7 @@ FEET_INCHES = re.compile(r"(\d{1,3})\s?(?:'|ft\.?)\s?-?\s?(\d{1,2})\s?(?:\"|in\b
 
 
 def numeral(text: str, start: int, lists: bool) -> Item | None:
+    """The number that stands at *start*; *lists*: commas part items. None where there is none."""
     found = NUMBER.match(text, start)
     if not found or (found.group()[0] in ".," and start and not _may_lead(found.group()[0], text[start - 1])):
         return None
@@ -40,8 +41,8 @@ def numeral(text: str, start: int, lists: bool) -> Item | None:
     if lists and "," in written[1:] and not (GROUP.fullmatch(written) and SIZE_UNIT.match(text, found.end())):
         written = written.partition(",")[0]
     if kind == "aught":
-        number = Number(Fraction(0), Fraction(0), "fraction", written)
-        return Item("number", written, start, found.end(), unit="aught", number=number)
+        aught = Number(Fraction(0), Fraction(0), "fraction", written)
+        return Item("number", written, start, found.end(), unit="aught", number=aught)
     number = parse_number(written)
     if number is None:
         return Item("word", written, start, start + len(written))
