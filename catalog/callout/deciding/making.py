@@ -9,6 +9,7 @@ from catalog.units import MM_PER_INCH
 
 
 def figures_of_side(side: Side) -> tuple[object, ...]:
+    """Pitch, wire and aperture in mm, to tell readings apart."""
     return tuple(length and length.mm for length in (side.pitch, side.wire, side.aperture))
 
 
@@ -20,6 +21,7 @@ def make_reading(
     weave: Weave | None = None,
     notes: tuple[str, ...] = (),
 ) -> Reading:
+    """The reading that a combination makes, with everything else that the text says."""
     options = made.options
     weave = weave or draft.weave
     area, derived = _open_area(draft, made, weave)

@@ -7,6 +7,7 @@ from catalog.callout.text.items import Item
 
 
 def give_side(items: list[Item], at: int, word: Item, last: Item | None) -> None:
+    """Give a word for warp or weft its number: the one before it, or the one that it leads."""
     side = word.senses["side"]
     holder = (
         last

@@ -30,6 +30,7 @@ def peek(items: list[Item], at: int) -> Item | None:
 
 
 def unit_of(item: Item) -> str | None:
+    """The unit that a sign or a word stands for; None where it is none."""
     if item.kind == "sign":
         return SIGNS.get(item.text)
     if item.has("slot") and item.text.startswith("%"):

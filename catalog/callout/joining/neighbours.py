@@ -7,10 +7,12 @@ PASSED_OVER = ("material", "harmless", "finish", "galvanised", "tolerance word",
 
 
 def last_of(item: Item) -> Item:
+    """The number itself, or the last of a product."""
     return item.members[-1] if item.kind == "chain" else item
 
 
 def first_of(item: Item) -> Item:
+    """The number itself, or the first of a product."""
     return item.members[0] if item.kind == "chain" else item
 
 

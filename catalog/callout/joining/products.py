@@ -77,6 +77,7 @@ def _labels_at(items: list[Item], at: int) -> list[Item]:
 
 
 def name_number(number: Item, label: Item) -> None:
+    """Give a number the figure or the direction that a word beside it names."""
     number.slot = number.slot or label.senses.get("slot")
     number.side = number.side or label.senses.get("side")
     join(min(number, label, key=_start_of), max(number, label, key=_start_of), number)

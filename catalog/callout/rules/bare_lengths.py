@@ -5,11 +5,9 @@ from catalog.callout.rules.draft import POSSIBLE, USUAL, Draft, Option
 from catalog.callout.rules.gauge_senses import gauge_options
 from catalog.callout.rules.shape import has_free_wire, knows_wire
 from catalog.callout.rules.taking import take
+from catalog.callout.rules.two_lengths import two_lengths
 from catalog.callout.rules.unit_senses import preferred_unit, unit_options
 from catalog.callout.text.items import Item
-
-FINE_MM = 4
-"""Up to here 'w × d' in millimetres is how metric cloth is named; above, an opening and a pitch are mixed up."""
 
 
 def beside_openings(draft: Draft, free: list[Item], shape: str) -> None:
@@ -38,7 +36,7 @@ def lengths_only(draft: Draft, chain: Item, free: list[Item], shape: str) -> Non
     elif has_free_wire(draft, free):
         opening_or_pitch(draft, free, None)
     else:
-        _two_lengths(draft, chain, free)
+        two_lengths(draft, chain, free, _unit_for(draft, free))
 
 
 def _unit_for(draft: Draft, numbers: list[Item]) -> str:
@@ -64,66 +62,6 @@ def opening_or_pitch(draft: Draft, openings: list[Item], wires: list[Item] | Non
             for slot, name in (("aperture", "opening"), ("pitch", "pitch"))
         ]
     )
-
-
-def _two_lengths(draft: Draft, chain: Item, free: list[Item]) -> None:
-    """'0,25 x 0,16 mm', '0.25/0.16': opening and wire, as fine metric cloth is named;
-    coarse or in inches also pitch and wire.
-
-    A rectangular opening stays possible; the wire first is thought of where opening and wire would make no cloth.
-    """
-    unit = _unit_for(draft, free)
-    first, second = free[0].length(unit), free[1].length(unit)
-    written = " x ".join(n.text for n in free)
-    rectangular = Option(
-        f"rectangular opening {written}",
-        (length_claim("aperture", free, unit),),
-        POSSIBLE,
-        2 if second.mm <= first.mm else 0,
-        missing=("wire",),
-        sense="opening x wire or rectangle",
-    )
-    take(free, "aperture")
-    if draft.is_slotted:
-        draft.claims += rectangular.claims
-        return
-    free[1].taken = "wire"
-    by_stroke = chain.joins and chain.joins[-1] == "/"
-    metric = not any(n.unit in ("in", "thou") for n in free) and unit not in ("in",)
-    options = [
-        Option(
-            f"opening {free[0].text}, wire {free[1].text}",
-            (length_claim("aperture", free[:1], unit), length_claim("wire", free[1:], unit)),
-            USUAL,
-            sense="opening or pitch",
-        )
-    ]
-    fine = metric and (
-        by_stroke
-        or (first.mm <= FINE_MM and not all(n.number and n.number.is_integer and n.unit != "um" for n in free))
-    )
-    if not fine:
-        options.append(
-            Option(
-                f"pitch {free[0].text}, wire {free[1].text}",
-                (length_claim("pitch", free[:1], unit), length_claim("wire", free[1:], unit)),
-                USUAL if not metric else POSSIBLE,
-                sense="opening or pitch",
-            )
-        )
-    if second.mm > first.mm:
-        options.append(
-            Option(
-                f"wire {free[0].text}, opening {free[1].text}",
-                (length_claim("aperture", free[1:], unit), length_claim("wire", free[:1], unit)),
-                POSSIBLE,
-                0,
-                sense="order",
-            )
-        )
-    if not by_stroke and first.mm != second.mm:
-        options.append(rectangular)
-    draft.choices.append(options)
 
 
 def length_alone(draft: Draft, number: Item) -> None:

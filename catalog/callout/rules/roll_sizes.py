@@ -44,6 +44,7 @@ def size_like(number: Item) -> bool:
 
 
 def set_pair(draft: Draft, size: Size, one: Item, other: Item) -> None:
+    """Take two numbers as width and length, the shorter first where one is beyond any roll."""
     first, second = (
         size_mm(one, one.unit or _twin_unit(one, other)),
         size_mm(other, other.unit or _twin_unit(other, one)),

@@ -23,6 +23,7 @@ def _letter(number: Item) -> str:
 
 
 def knows_wire(draft: Draft) -> bool:
+    """True where the wire is claimed already."""
     return draft.has_slot("wire")
 
 
