@@ -10,6 +10,7 @@ __all__ = ["read"]
 @lru_cache(maxsize=32)
 def read(text: str) -> Understanding:
     """Understand a callout: readings, status, question, problems, words by role. Never raises on a text."""
+    from catalog.callout.deciding.doubts import doubted
     from catalog.callout.reader import read as read_text
 
-    return read_text(text)
+    return doubted(read_text(text))
