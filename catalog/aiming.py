@@ -75,11 +75,24 @@ def _tolerance(reading: Reading, stated: str | None, share: Fraction) -> tuple[T
     limits = dict(reading.limits)
     if sides[0] is None or sides[1] is None or reading.is_filter:
         return None, limits
-    if stated is None and (drawn := _drawn(limits.get("aperture_mm"), sides[0].mm, sides[1].mm)):
+    if drawn := _drawn(limits.get("aperture_mm"), sides[0].mm, sides[1].mm):
         del limits["aperture_mm"]
-        return drawn, limits
+        if stated is None:
+            return drawn, limits
+    if stated in EDITIONS:
+        _check_scope(reading, sides[0].mm == sides[1].mm)
     allowed = [_allowance(side.mm, stated, reading.standard, share) for side in sides if side]
     return Tolerance(float(allowed[0].mm), float(allowed[1].mm), allowed[0].source), limits
+
+
+def _check_scope(reading: Reading, is_square: bool) -> None:
+    """A sieve edition speaks of square test-sieve cloth alone. Raises InputError for any other."""
+    coated = reading.finish is not None and "after" in reading.finish
+    what = (
+        "rectangular cloth" if not is_square else reading.crimp if reading.crimp else reading.finish if coated else None
+    )
+    if what:
+        raise InputError(f"A test-sieve edition has no tolerance for {what}: state a percentage instead.")
 
 
 def _drawn(bounds: tuple[float | None, float | None] | None, warp: Fraction, weft: Fraction) -> Tolerance | None:

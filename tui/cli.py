@@ -10,7 +10,7 @@ from contextlib import suppress
 from importlib import import_module
 from typing import Any, NoReturn
 
-from catalog.errors import CrossclothError
+from catalog.errors import CrossclothError, InputError, StoreError
 from catalog.version import VERSION
 from tui.commandline.options import Setting, common, setting_of, terminal_is_dumb
 from tui.exit_codes import ExitCode, complain, exit_code, say
@@ -24,8 +24,7 @@ class Parser(argparse.ArgumentParser):
 
     def error(self, message: str) -> Any:
         """Say what is wrong with the options and where help is."""
-        say(f"crosscloth: {message}; '{self.prog} --help' lists what there is.")
-        raise SystemExit(ExitCode.BAD_INPUT)
+        raise InputError(f"{message}; '{self.prog} --help' lists what there is.", "E_USAGE")
 
 
 def parser_for(argv: Sequence[str]) -> argparse.ArgumentParser:
@@ -70,7 +69,7 @@ def _answer(words: list[str]) -> int:
             return _browse(setting, mouse=not arguments.no_mouse)
         return int(arguments.run(arguments, setting))
     except CrossclothError as error:
-        return _fail(error, setting)
+        return _fail(error, setting, "--json" in words)
     except KeyboardInterrupt:
         say("crosscloth: interrupted.")
         return ExitCode.INTERRUPTED
@@ -86,12 +85,12 @@ def _answer(words: list[str]) -> int:
         )
 
 
-def _fail(error: CrossclothError, setting: Setting | None) -> int:
+def _fail(error: CrossclothError, setting: Setting | None, wants_json: bool = False) -> int:
     complain(error)
-    if setting is not None and setting.json:
+    if wants_json or (setting is not None and setting.json):
         from catalog.report.documents import error_document
 
-        setting.write_json(error_document(error))
+        (setting or Setting(None, True, "both", False, False)).write_json(error_document(error))
     return exit_code(error)
 
 
@@ -117,11 +116,14 @@ def _browse(setting: Setting, mouse: bool) -> int:
 def _start_log(words: list[str]) -> None:
     from tui.places import state_directory
 
-    logging.basicConfig(
-        filename=state_directory() / "crosscloth.log",
-        level=logging.INFO,
-        format="%(asctime)s %(levelname)s %(name)s: %(message)s",
-    )
+    try:
+        logging.basicConfig(
+            filename=state_directory() / "crosscloth.log",
+            level=logging.INFO,
+            format="%(asctime)s %(levelname)s %(name)s: %(message)s",
+        )
+    except OSError as error:
+        raise StoreError(f"The log can't be written: {(error.strerror or str(error)).lower()}.") from None
     logging.getLogger("crosscloth").info("version %s called with %r", VERSION, words)
 
 

@@ -6,7 +6,7 @@ from typing import Any
 from catalog.cloth import Cloth
 from catalog.construction import Construction, Wires
 from catalog.crossref import Answer
-from catalog.errors import CrossclothError, InputError
+from catalog.errors import CrossclothError, InputError, StoreError
 from catalog.report.reading_document import reading_fields
 from catalog.search.candidate import Candidate, Finding, StockLine
 from catalog.search.limit_report import LimitReport
@@ -19,7 +19,10 @@ Document = dict[str, Any]
 
 def error_document(error: CrossclothError) -> Document:
     """A failure: code, message, column."""
-    code = error.code if isinstance(error, InputError) else "E_STORE"
+    if isinstance(error, InputError):
+        code = error.code
+    else:
+        code = "E_STORE" if isinstance(error, StoreError) else "E_NOT_FOUND"
     column = error.column if isinstance(error, InputError) else None
     return {"schema": SCHEMA, "error": {"code": code, "message": error.message, "column": column}}
 

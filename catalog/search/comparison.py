@@ -140,10 +140,18 @@ def _asked_of(target: Target, rules: HouseRules) -> _Sides:
     allowed = target.tolerance
     warp = _asked(target.warp, allowed.warp_mm if allowed else None, rules)
     weft = _asked(target.weft, allowed.weft_mm if allowed else None, rules)
-    open_share = _open((warp.aperture, warp.pitch), (weft.aperture, weft.pitch))
+    open_share = _open((warp.aperture, warp.pitch), (weft.aperture, weft.pitch)) or _stated_open(target)
     sides = _Sides(target, rules, warp, weft, warp == weft, open_share)
     _newest[:] = [sides]
     return sides
+
+
+def _stated_open(target: Target) -> Fraction | None:
+    """The open area that the text itself states, as a share; where figures give one, theirs counts."""
+    stated = target.reading.open_area_pct
+    if stated is None or "open_area_pct" in target.reading.derived:
+        return None
+    return Fraction(round(stated * 1e6), 10**8)
 
 
 def _direction(name: str, asked: _Asked, found: Wires) -> Direction:

@@ -7,6 +7,9 @@ from catalog.search.candidate import Finding, Verdict
 from catalog.search.comparison import Comparison, Direction
 from catalog.search.rules import HouseRules
 
+EQUAL_RATING = Fraction(5, 1000)
+"""Ratings are equal to rounding within 0.5 %."""
+
 
 def decide_filter(c: Comparison, gates: Sequence[Finding], rules: HouseRules) -> tuple[Verdict, list[Finding]]:
     """Verdict and findings for a filter target, whatever the purpose."""
@@ -20,7 +23,7 @@ def decide_filter(c: Comparison, gates: Sequence[Finding], rules: HouseRules) ->
         return Verdict.CANNOT_SAY, findings
     if _agree(c, Fraction(0)) and rating == "equal":
         return Verdict.SAME, findings
-    if _agree(c, rules.filter_make) and rating == "equal":
+    if _agree(c, rules.filter_make):
         return Verdict.INTERCHANGEABLE, findings
     return Verdict.CANNOT_SAY, findings
 
@@ -60,7 +63,7 @@ def _rating(c: Comparison, rules: HouseRules) -> tuple[str | bool | None, Findin
         return False, Finding("rating", False, f"{words}: over {float(rules.filter_rating * 100):g} % apart.")
     if off > rules.filter_make:
         return None, Finding("rating", None, f"{words}: ask whether that will do.")
-    return "equal", Finding("rating", True, f"{words}.")
+    return "equal" if off <= EQUAL_RATING else "near", Finding("rating", True, f"{words}.")
 
 
 def _make_findings(c: Comparison) -> list[Finding]:

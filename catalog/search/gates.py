@@ -8,6 +8,7 @@ from catalog.search.comparison import Comparison
 from catalog.search.wording import mm, pct
 
 FAMILY_OF_WORD = {"phosphor bronze": "bronze", "duplex": "duplex stainless"}
+SIEVE_STANDARDS = ("3310", "E11", "E 11")
 AMBIGUOUS = ("brass", "bronze")
 """Names that several metals of different use go by."""
 NEEDS_AN_OPENING = ("aperture_mm", "open_area_pct")
@@ -103,6 +104,26 @@ def finish_gate(c: Comparison) -> Finding | None:
     return Finding("finish", False, f"Asked finish is {asked}; this cloth is {found or 'uncoated'}.")
 
 
+def crimp_gate(c: Comparison) -> Finding | None:
+    """A crimp that was stated has to be there; one that isn't on record is a question."""
+    asked, found = c.target.reading.crimp, c.made.crimp
+    if asked is None or asked == found:
+        return None
+    if found is None:
+        return Finding("crimp", None, f"Asked is {asked}; the crimp of this cloth is not on record: ask.", "as asked")
+    return Finding("crimp", False, f"Asked is {asked}; this cloth has {found}.", "as asked")
+
+
+def sieve_gate(c: Comparison) -> Finding | None:
+    """Where a test-sieve standard is asked, industrial cloth of the same figures is for its owner to accept."""
+    asked, found = c.target.reading.standard or "", c.cloth.standard or ""
+    named = next((name for name in SIEVE_STANDARDS if name in asked), None)
+    if named is None or any(name in found for name in SIEVE_STANDARDS):
+        return None
+    text = f"Asked is test-sieve cloth to {asked}; this is industrial cloth: ask whether it will do."
+    return Finding("sieve standard", None, text, "certified sieves: geometry never settles it")
+
+
 def data_gate(c: Comparison) -> Finding | None:
     """Figures that can't be true are not compared."""
     if c.made.is_filter or all(d.found.aperture_mm > 0 for d in c.directions):
@@ -175,7 +196,7 @@ def _figure(key: str, value: float) -> str:
     return f"{value:.4g} kg/m²" if key == "mass_kg_m2" else f"{value:.4g}"
 
 
-GATES: tuple[Gate, ...] = (construction_gate, weave_gate, alloy_gate, finish_gate, data_gate)
+GATES: tuple[Gate, ...] = (construction_gate, weave_gate, alloy_gate, finish_gate, crimp_gate, sieve_gate, data_gate)
 
 
 def gate_findings(c: Comparison) -> list[Finding]:

@@ -72,9 +72,43 @@ def guard_verdict(c: Comparison, rules: HouseRules) -> Verdict:
     return Verdict.NEAR_SAFE if low else Verdict.INTERCHANGEABLE
 
 
+def guard_on_limits(c: Comparison, held: Verdict) -> Verdict:
+    """An asked maximum bounds the largest single opening, so it is held to nominal plus oversize."""
+    most = c.target.limits.get("aperture_mm", (None, None))[1]
+    if held is not Verdict.INTERCHANGEABLE or most is None:
+        return held
+    oversize = oversize_mm(c)
+    if oversize is None:
+        return Verdict.CANNOT_SAY
+    return held if _largest_mm(c, oversize) <= most + 1e-9 else Verdict.NOT_EQUIVALENT
+
+
+def _largest_mm(c: Comparison, oversize: float) -> float:
+    return max(float(d.found.aperture_mm) for d in c.directions) + oversize
+
+
+def _largest_finding(c: Comparison, oversize: float) -> list[Finding]:
+    most = c.target.limits.get("aperture_mm", (None, None))[1]
+    if most is None:
+        return []
+    largest = _largest_mm(c, oversize)
+    text = f"Largest single opening {mm(largest)} (nominal plus {mm(oversize)}); asked is at most {mm(most)}."
+    return [Finding("guard opening", largest <= most + 1e-9, text, "as asked")]
+
+
+def _not_met(c: Comparison) -> list[Finding]:
+    """Why a guard isn't met, where it isn't: each direction's opening and wire."""
+    if not c.asks_wire:
+        return [Finding("guard", None, "For a guard the wire has to be asked as well as the opening.", "house rule")]
+    if is_met(c):
+        return []
+    text = "For a guard no opening may be larger and no wire thinner than asked: here one of them is."
+    return [Finding("guard", False, text, "house rule")]
+
+
 def guard_findings(c: Comparison) -> list[Finding]:
     """What guards need said: the distance at nominal and at the largest opening, or what is missing."""
-    if not c.asks_aperture or c.made.is_filter:
+    if c.made.is_filter:
         return []
     oversize = oversize_mm(c)
     if oversize is None:
@@ -82,7 +116,13 @@ def guard_findings(c: Comparison) -> list[Finding]:
             "The largest single oversize of an opening is not known for industrial cloth: "
             "state one (--oversize) to judge the safety distance."
         )
-        return [Finding("guard distance", None, text, SOURCE)]
+        return [*(_not_met(c) if c.asks_aperture else []), Finding("guard distance", None, text, SOURCE)]
+    if not c.asks_aperture:
+        return _largest_finding(c, oversize)
+    return _not_met(c) + _distance_findings(c, oversize)
+
+
+def _distance_findings(c: Comparison, oversize: float) -> list[Finding]:
     asked, found = distances(c, oversize)
     if asked is None or found is None:
         return [Finding("guard distance", None, "The table of safety distances ends at 120 mm.", SOURCE)]

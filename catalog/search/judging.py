@@ -90,13 +90,17 @@ def _verdicts(
     """Retain and pass always, and each purpose that was named."""
     wanted = dict.fromkeys((*SIDE_BY_SIDE, *purposes))
     if _is_about_filter_cloth(c):
-        return dict.fromkeys((p.value for p in wanted), decide_filter(c, gates, rules)[0])
+        held = decide_filter(c, gates, rules)[0]
+        guard = held if held is Verdict.NOT_EQUIVALENT else Verdict.CANNOT_SAY  # its openings have no table
+        return {p.value: guard if p is Purpose.GUARD else held for p in wanted}
     return {p.value: decide(p, c, gates, rules) for p in wanted}
 
 
 def _details(c: Comparison, gates: list[Finding], purposes: tuple[Purpose, ...], rules: HouseRules) -> list[Finding]:
     if _is_about_filter_cloth(c):
-        return decide_filter(c, gates, rules)[1]
+        said = decide_filter(c, gates, rules)[1]
+        text = "Safety distances are tabled for openings; filter cloth has none: ask who is responsible for the guard."
+        return [Finding("guard", None, text, ""), *said] if Purpose.GUARD in purposes else said
     guards = guard_findings(c) if Purpose.GUARD in purposes else []
     return guards + findings(c, purposes, rules) + _in_service(c, purposes)
 

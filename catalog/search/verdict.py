@@ -4,7 +4,7 @@ from collections.abc import Sequence
 
 from catalog.search.candidate import Finding, Verdict
 from catalog.search.comparison import Comparison
-from catalog.search.guard import guard_verdict
+from catalog.search.guard import guard_on_limits, guard_verdict
 from catalog.search.purposes import ABOUT, Aspect, Reach, Stand, worst_reach
 from catalog.search.rules import HouseRules
 from catalog.target import Purpose
@@ -17,7 +17,8 @@ def decide(purpose: Purpose, c: Comparison, gates: Sequence[Finding], rules: Hou
     if any(gate.ok is None for gate in gates):
         return Verdict.CANNOT_SAY
     if not c.asks_aperture:
-        return _without_aperture(c)
+        held = _without_aperture(c)
+        return guard_on_limits(c, held) if purpose is Purpose.GUARD else held
     if purpose is Purpose.GUARD:
         return guard_verdict(c, rules)
     aspect = ABOUT[purpose](c, rules)

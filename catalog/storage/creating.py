@@ -37,7 +37,7 @@ def create_file(path: Path, with_demo: bool) -> None:
 
 
 def _why(path: Path, error: OSError) -> str:
-    if isinstance(error, FileNotFoundError):
+    if isinstance(error, FileNotFoundError) and not path.parent.exists():
         return f"The store {path} can't be made: the folder {path.parent} doesn't exist."
     return f"The store {path} can't be made: {(error.strerror or str(error)).lower()}."
 

@@ -300,3 +300,13 @@ def test_a_bare_bronze_matches_no_other_metal(crosscloth: Program) -> None:
     fits = [c["alloy"] for c in document["candidates"] if c["verdict"] in ("same", "interchangeable", "near-safe")]
     assert not fits
     assert any(c["alloy"] == "CuSn5" and c["verdict"] == "cannot-say" for c in document["candidates"])
+
+
+@pytest.mark.parametrize(
+    "words", [["bogus", "--json"], ["match", "x", "--frobnicate", "--json"], ["show", "nope", "--json"]]
+)
+def test_wrong_usage_answers_as_json_where_json_was_asked(crosscloth: Program, words: list[str]) -> None:
+    said = crosscloth(*words)
+    assert said.code == 2
+    assert set(said.json["error"]) == {"code", "message", "column"}
+    assert said.err

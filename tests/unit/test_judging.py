@@ -227,3 +227,49 @@ def test_a_need_is_read_with_its_unit(text: str, pieces: int, size: tuple) -> No
 def test_a_need_without_unit_or_sense_is_refused(text: str) -> None:
     with pytest.raises(InputError):
         parse_need(text)
+
+
+def test_a_guard_asked_by_a_maximum_is_held_to_its_largest_opening() -> None:
+    asked = Reading("limits", limits={"aperture_mm": (None, 9.0)})
+    assert judged(metric("8.8", "2.0"), Purpose.GUARD, asked=asked).verdict == "cannot-say"
+    assert judged(metric("8.8", "2.0"), Purpose.GUARD, asked=asked, oversize_mm=0.3).verdict == "not-equivalent"
+    assert judged(metric("8.5", "2.0"), Purpose.GUARD, asked=asked, oversize_mm=0.3).verdict == "interchangeable"
+
+
+def test_a_guard_that_is_not_met_says_why() -> None:
+    found = judged(metric("9.0", "1.9"), Purpose.GUARD, asked=square("9.0", "2.0"), oversize_mm=0.3)
+    assert found.verdict == "not-equivalent"
+    assert any(f.rule == "guard" and f.ok is False for f in found.findings)
+
+
+def test_test_sieve_cloth_is_not_industrial_cloth_of_the_same_figures() -> None:
+    asked = replace(ASKED, standard="ISO 3310-1")
+    assert judged(metric("0.25", "0.16"), asked=asked).verdict == "cannot-say"
+    certified = replace(metric("0.25", "0.16"), standard="ISO 3310-1")
+    assert judged(certified, asked=asked).verdict == "same"
+
+
+def test_a_crimp_that_was_asked_and_is_not_on_record_is_a_question() -> None:
+    assert judged(metric("0.25", "0.16"), asked=replace(ASKED, crimp="lock crimp")).verdict == "cannot-say"
+
+
+def test_a_stated_open_area_counts_where_no_wire_was_asked() -> None:
+    """0.25/0.16 opens 37.18 %; 45 % was asked, 7.8 points more."""
+    side = Side(aperture=mm("0.250"))
+    asked = Reading("aperture", warp=side, weft=side, open_area_pct=45.0)
+    assert judged(metric("0.25", "0.16"), Purpose.RETAIN, asked=asked).verdict == "near-safe"
+
+
+def test_a_tolerance_of_the_users_replaces_the_drawings() -> None:
+    asked = replace(ASKED, limits={"aperture_mm": (0.2475, 0.2525)})
+    tight, loose = (
+        judged(by_count(62, "0.0065"), Purpose.RETAIN, asked=asked, stated_tolerance=t) for t in (None, "3")
+    )
+    assert (tight.verdict, loose.verdict) == ("near-safe", "interchangeable")
+
+
+def test_a_sieve_edition_is_not_quoted_for_cloth_outside_its_scope() -> None:
+    with pytest.raises(InputError):
+        aim(replace(ASKED, crimp="lock crimp"), stated_tolerance="e11")
+    with pytest.raises(InputError):
+        aim(replace(ASKED, finish="galvanised after weaving"), stated_tolerance="iso3310")

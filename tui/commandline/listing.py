@@ -18,6 +18,7 @@ if TYPE_CHECKING:
 SORTS = ("aperture", "wire", "open-area", "mass", "id")
 UNITS = {"mm": 1.0, "um": 0.001, "µm": 0.001, "μm": 0.001, "in": 25.4, '"': 25.4, "thou": 0.0254}
 NUMBER = r"(\d*[.,]?\d+)"
+UNIT_BEFORE_DOTS = re.compile(r"\s*(mm|um|µm|μm|in|\"|thou)\s*\.\.\s*([\d.,]*)\s*(?:mm|um|µm|μm|in|\"|thou)?\s*$")
 RANGE = re.compile(rf"^\s*{NUMBER}?\s*(\.\.)?\s*{NUMBER}?\s*(mm|um|µm|μm|in|\"|thou)\s*$")
 
 
@@ -144,7 +145,7 @@ def _sensible(value: float, what: str, most: float) -> float:
 
 def range_of(text: str, name: str) -> "Range":
     """Read '0.1..0.2mm', '..0.8mm', '0.35..mm'; one figure alone is met within 0.5 %. mm. Raises InputError."""
-    found = RANGE.match(text)
+    found = RANGE.match(UNIT_BEFORE_DOTS.sub(r"..\2\1", text) if UNIT_BEFORE_DOTS.search(text) else text)
     if not found or (found[1] is None and found[3] is None):
         raise InputError(f"--{name} takes a range with its unit, like 0.1..0.2mm, ..0.8mm or 0.35..mm, not {text!r}.")
     unit = UNITS[found[4]]

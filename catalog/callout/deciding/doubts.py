@@ -28,6 +28,8 @@ PER_AREA = re.compile(
     re.IGNORECASE,
 )
 BY_DIRECTION = re.compile(r"\b(?:warp|kette|kett\w*|cha[iî]ne|ordito|urdimbre)\b(?!\s*(?:×|x)\s)", re.IGNORECASE)
+OWN_SENTENCE = "Woven wire"
+"""How a construction is written back, direction by direction."""
 STEELS = (302, 303, 304, 309, 310, 314, 316, 317, 321, 347, 410, 430, 904)
 
 
@@ -66,7 +68,7 @@ def steel_as_bound(understood: Understanding) -> Problem | None:
 def wires_by_direction(understood: Understanding) -> Problem | None:
     """Figures named for warp and weft one by one, where one direction came out unlike any cloth."""
     found = BY_DIRECTION.search(understood.text)
-    if found is None or understood.text.lower().startswith("woven wire"):
+    if found is None or understood.text.startswith(OWN_SENTENCE):
         return None
     for reading in understood.surviving:
         wires = [side.wire.mm for side in (reading.warp, reading.weft) if side.wire is not None]
@@ -91,6 +93,8 @@ def far_apart(understood: Understanding) -> Problem | None:
 def swapped_dutch(understood: Understanding) -> Problem | None:
     """Dutch cloth written fine count first, with both wires: which wire goes with which is a question."""
     for reading in understood.surviving[:1]:
+        if understood.text.startswith(OWN_SENTENCE):
+            break
         if reading.weave not in (Weave.PLAIN_DUTCH, Weave.TWILLED_DUTCH):
             continue
         warp, weft = reading.warp, reading.weft
