@@ -15,6 +15,7 @@ from catalog.callout.reading import Status
         "shall not be coarser than 20 mesh",
         "at least 100 holes per square inch",
         "max 144 holes/cm²",
+        "larger than 20 mesh",
         "60 mesh .0065 304 max 1 kg/m2",
         "14 mesh .020 warp .018 weft 304",
     ],

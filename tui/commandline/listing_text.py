@@ -72,6 +72,8 @@ def report_lines(report: "LimitReport", served: bool) -> Iterator[str]:
 
 def _window_line(window: Any) -> Iterator[str]:
     low, high = window.aperture
+    if not low and high is None:
+        return  # a limit on the wire alone leaves every aperture
     if window.is_empty:
         yield f"No square cloth satisfies them: the wire asks an aperture of {low:.3f} mm, the limit is {high:.3f} mm."
         return

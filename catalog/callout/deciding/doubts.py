@@ -28,6 +28,7 @@ PER_AREA = re.compile(
     re.IGNORECASE,
 )
 BY_DIRECTION = re.compile(r"\b(?:warp|kette|kett\w*|cha[iî]ne|ordito|urdimbre)\b(?!\s*(?:×|x)\s)", re.IGNORECASE)
+SIZE_OF_MESH = re.compile(r"\b(?:larger|bigger|greater|smaller)\s+than\s+[\d.,]+\s*(?:mesh|#)", re.IGNORECASE)
 OWN_SENTENCE = "Woven wire"
 """How a construction is written back, direction by direction."""
 STEELS = (302, 303, 304, 309, 310, 314, 316, 317, 321, 347, 410, 430, 904)
@@ -53,6 +54,15 @@ def count_per_area_as_bound(understood: Understanding) -> Problem | None:
     return Problem(
         "E_NOT_UNDERSTOOD", "A limit on openings per area: state the count per inch or cm.", found.start() + 1
     )
+
+
+def size_of_a_mesh(understood: Understanding) -> Problem | None:
+    """'larger than 20 mesh' is a larger number to one and a larger hole to another."""
+    found = SIZE_OF_MESH.search(understood.text)
+    if found is None or not any("count_per_in" in r.limits for r in understood.surviving):
+        return None
+    message = f"'{found.group()}': a larger number or a larger opening? Say 'finer than' or 'coarser than'."
+    return Problem("E_NOT_UNDERSTOOD", message, found.start() + 1)
 
 
 def steel_as_bound(understood: Understanding) -> Problem | None:
@@ -104,7 +114,13 @@ def swapped_dutch(understood: Understanding) -> Problem | None:
     return None
 
 
-SPOILING: tuple[Doubt, ...] = (negated_bound, count_per_area_as_bound, steel_as_bound, wires_by_direction)
+SPOILING: tuple[Doubt, ...] = (
+    negated_bound,
+    count_per_area_as_bound,
+    size_of_a_mesh,
+    steel_as_bound,
+    wires_by_direction,
+)
 """Where one of these holds, what was read is likely wrong: nothing is to be matched with it."""
 OPEN: tuple[Doubt, ...] = (far_apart, swapped_dutch)
 """Where one of these holds, what was read is one way to take it."""
